@@ -31,11 +31,11 @@ struct Reaction {
 /// What one segment of a member (the part between two hinges, mostly the whole member) carries and how its ends move: all
 /// that its diagrams need besides the loads.
 struct SegmentState {
-    double N = 0;       ///< axial force just inside the start, N
-    double V = 0;       ///< shear force there, N
-    double M = 0;       ///< bending moment there, N m
-    double along = 0;   ///< movement of the member's own first point along its axis, m
-    double across = 0;  ///< and across it, m
+    double N = 0;        ///< axial force that the node passes to the start, N (loads at the very start come after it)
+    double V = 0;        ///< shear force there, N
+    double M = 0;        ///< bending moment there, N m
+    double along = 0;    ///< movement of the member's own first point along its axis, m
+    double across = 0;   ///< and across it, m
     double rotation = 0; ///< and its rotation, rad
 };
 
@@ -82,12 +82,12 @@ struct Envelope {
     std::vector<OfMember> members;     ///< by member
 };
 
-struct Structure; // the numbered structure: internal
+struct Internals; // the numbered structure and its loads by member
 
 /// A finished analysis. Holds a pointer to the model, which must outlive it.
 struct Analysis {
     const Model* model = nullptr;
-    std::shared_ptr<const Structure> structure;
+    std::shared_ptr<const Internals> internals;
     std::vector<Response> cases;        ///< by case
     std::vector<Response> combinations; ///< by combination
     std::optional<Envelope> strength;   ///< absent where the model has no such combination

@@ -148,6 +148,7 @@ struct LoadCase {
     std::string group;    ///< empty when none is given
     int with = -1;        ///< index of the case that this one acts together with
     int entries = 0;      ///< how many entries its `loads` has
+    std::vector<Position> entry_positions; ///< of each of these entries; empty for a model made in code
     double self_weight = 0; ///< factor on the weight of every member, acting along -y
     std::vector<MemberLoad> member_loads; ///< without the self-weight
     std::vector<NodeLoad> node_loads;

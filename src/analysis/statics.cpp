@@ -1,0 +1,258 @@
+// Cases on one factorisation, combinations by superposition.
+
+#include <algorithm>
+#include <cmath>
+
+#include <fmt/format.h>
+
+#include "analysis/case_loads.hpp"
+#include "analysis/envelope.hpp"
+#include "analysis/verification.hpp"
+#include "groundsill/analysis.hpp"
+#include "system/mechanism.hpp"
+
+namespace groundsill {
+
+namespace {
+
+/// A load in global axes turned into those of a node.
+void add_to_node(const Structure& structure, int node, Real x, Real y, Real moment, std::vector<Real>& nodal) {
+    if (const TurnedAxes* axes = structure.turned_axes(node)) {
+        const Real turned = axes->cosine * x + axes->sine * y;
+        y = -axes->sine * x + axes->cosine * y;
+        x = turned;
+    }
+    nodal[3 * node] += x;
+    nodal[3 * node + 1] += y;
+    nodal[3 * node + 2] += moment;
+}
+
+/// Imposed movements of the supports' own directions, by direction; zero where none is imposed.
+std::vector<Real> imposed_movements(const Structure& structure, const LoadCase& load_case) {
+    std::vector<Real> imposed(structure.directions(), 0);
+    for (const SupportMovement& movement : load_case.movements) {
+        const int node = structure.model->supports[movement.support].node;
+        imposed[3 * node] += movement.x;
+        imposed[3 * node + 1] += movement.y;
+        imposed[3 * node + 2] += movement.rotation;
+    }
+    return imposed;
+}
+
+LoadVector make_load_vector(const Internals& internals, int index, const std::vector<Real>& imposed) {
+    const Structure& structure = internals.structure;
+    const LoadCase& load_case = structure.model->cases[index];
+    LoadVector loads;
+    loads.nodal.assign(structure.directions(), 0);
+    for (const NodeLoad& load : load_case.node_loads)
+        add_to_node(structure, load.node, load.x, load.y, load.moment, loads.nodal);
+    // a spring whose far end moves by Δ pushes with k Δ
+    for (int d = 0; d < structure.directions(); ++d)
+        if (imposed[d] != 0 && structure.spring[d] != 0) loads.nodal[d] += structure.spring[d] * imposed[d];
+    if (!internals.loads.loads_members(index)) return loads;
+    loads.fixed.resize(structure.segments.size());
+    elements::SegmentLoads acting;
+    elements::Loading loading;
+    for (std::size_t k = 0; k < structure.segments.size(); ++k) {
+        const Segment& segment = structure.segments[k];
+        acting.clear();
+        internals.loads.add(structure, index, 1, segment, acting);
+        if (acting.empty()) continue;
+        elements::cut(acting, segment.frame.length, loading);
+        loads.fixed[k] = elements::fixed_end(segment.frame, loading);
+    }
+    return loads;
+}
+
+/// The size of forces below which a reaction is round-off: 1e-16 of the largest load, fixed-end force or end force.
+Real noise_of(const Structure& structure, const LoadVector& loads, Real scale) {
+    for (const elements::FixedEnd& fixed : loads.fixed)
+        scale = std::max({scale, std::abs(fixed.q.axial), std::abs(fixed.V0), std::abs(fixed.VL),
+                          std::abs(fixed.q.first) / structure.size, std::abs(fixed.q.second) / structure.size});
+    return Real(1e-16) * scale;
+}
+
+Reaction reaction_of(const Structure& structure, const Support& support, const std::vector<Real>& missing,
+                     const std::vector<Real>& imposed, const Movements& u, Real noise) {
+    const Restraint* restraints[] = {&support.x, &support.y, &support.rotation};
+    Real force[3] = {0, 0, 0};
+    for (int c = 0; c < 3; ++c) {
+        const int d = 3 * support.node + c;
+        if (restraints[c]->is_fixed()) force[c] = -missing[d];
+        if (restraints[c]->is_elastic()) force[c] = -restraints[c]->stiffness * ((u.high[d] - imposed[d]) + u.low[d]);
+        if (std::abs(force[c]) < noise * (c == 2 ? structure.size : Real(1))) force[c] = 0;
+    }
+    if (const TurnedAxes* axes = structure.turned_axes(support.node)) {
+        const Real x = axes->cosine * force[0] - axes->sine * force[1];
+        force[1] = axes->sine * force[0] + axes->cosine * force[1];
+        force[0] = x;
+    }
+    return {static_cast<double>(force[0]), static_cast<double>(force[1]), static_cast<double>(force[2])};
+}
+
+NodeMovement movement_of(const Structure& structure, int node, const Movements& u) {
+    Real x = u.value(3 * node), y = u.value(3 * node + 1);
+    if (const TurnedAxes* axes = structure.turned_axes(node)) {
+        const Real turned = axes->cosine * x - axes->sine * y;
+        y = axes->sine * x + axes->cosine * y;
+        x = turned;
+    }
+    NodeMovement movement{static_cast<double>(x), static_cast<double>(y), std::nullopt};
+    if (structure.has_rotation[node]) movement.rotation = static_cast<double>(u.value(3 * node + 2));
+    return movement;
+}
+
+/// \param acting, loading room to work in
+SegmentState state_of(const Internals& internals, int load_case, const Segment& segment, const elements::FixedEnd* fixed,
+                      const Movements& u, elements::SegmentLoads& acting, elements::Loading& loading) {
+    const Structure& structure = internals.structure;
+    const EndForces f = end_forces(segment, basic_forces(structure, segment, u, fixed), fixed);
+    acting.clear();
+    if (fixed) internals.loads.add(structure, load_case, 1, segment, acting);
+    elements::State start{-f.along_i, f.across_i, -f.moment_i, 0, 0, 0};
+    elements::cut(acting, segment.frame.length, loading);
+    elements::place_start(segment.frame, loading, end_state(structure, segment, false, u),
+                          end_state(structure, segment, true, u), start);
+    const auto d = [](Real value) { return static_cast<double>(value); };
+    return {d(start.N), d(start.V), d(start.M), d(start.along), d(start.across), d(start.rotation)};
+}
+
+/// The finished response of a case from its movements.
+Response respond(const Internals& internals, int load_case, const LoadVector& loads, const std::vector<Real>& imposed,
+                 const Movements& u) {
+    const Structure& structure = internals.structure;
+    const Model& model = *structure.model;
+    Response response;
+    response.movements.reserve(model.nodes.size());
+    for (int node = 0; node < static_cast<int>(model.nodes.size()); ++node)
+        response.movements.push_back(movement_of(structure, node, u));
+    Real scale = 0;
+    const std::vector<Real> missing = residual(structure, loads, u, scale);
+    const Real noise = noise_of(structure, loads, scale);
+    for (const Support& support : model.supports)
+        response.reactions.push_back(reaction_of(structure, support, missing, imposed, u, noise));
+    response.segments.reserve(structure.segments.size());
+    elements::SegmentLoads acting;
+    elements::Loading loading;
+    for (std::size_t k = 0; k < structure.segments.size(); ++k)
+        response.segments.push_back(state_of(internals, load_case, structure.segments[k],
+                                             loads.fixed.empty() ? nullptr : &loads.fixed[k], u, acting, loading));
+    return response;
+}
+
+Response solve_case(const Internals& internals, const Factor& factor, const SoftShapes& soft, int load_case,
+                    Verification& verification) {
+    const Structure& structure = internals.structure;
+    const std::vector<Real> imposed = imposed_movements(structure, structure.model->cases[load_case]);
+    const LoadVector loads = make_load_vector(internals, load_case, imposed);
+    Movements given(structure.directions());
+    for (int d = 0; d < structure.directions(); ++d)
+        if (!structure.active[d]) given.high[d] = imposed[d];
+    const Refined refined = refine(structure, factor, soft, loads, given);
+    verification.residual = std::max(verification.residual, refined.residual);
+    Response response = respond(internals, load_case, loads, imposed, refined.u);
+    verification.equilibrium = std::max(verification.equilibrium, imbalance(internals, load_case, response));
+    return response;
+}
+
+void add_scaled(const Response& from, double factor, Response& to) {
+    for (std::size_t k = 0; k < from.movements.size(); ++k) {
+        to.movements[k].x += factor * from.movements[k].x;
+        to.movements[k].y += factor * from.movements[k].y;
+        if (from.movements[k].rotation) to.movements[k].rotation = to.movements[k].rotation.value_or(0) + factor * *from.movements[k].rotation;
+    }
+    for (std::size_t k = 0; k < from.reactions.size(); ++k) {
+        to.reactions[k].x += factor * from.reactions[k].x;
+        to.reactions[k].y += factor * from.reactions[k].y;
+        to.reactions[k].moment += factor * from.reactions[k].moment;
+    }
+    for (std::size_t k = 0; k < from.segments.size(); ++k) {
+        const SegmentState& a = from.segments[k];
+        SegmentState& b = to.segments[k];
+        b.N += factor * a.N;
+        b.V += factor * a.V;
+        b.M += factor * a.M;
+        b.along += factor * a.along;
+        b.across += factor * a.across;
+        b.rotation += factor * a.rotation;
+    }
+}
+
+Response superpose(const std::vector<Response>& cases, const Combination& combination) {
+    Response sum;
+    sum.movements.resize(cases[0].movements.size());
+    sum.reactions.resize(cases[0].reactions.size());
+    sum.segments.resize(cases[0].segments.size());
+    for (std::size_t k = 0; k < sum.movements.size(); ++k)
+        if (cases[0].movements[k].rotation) sum.movements[k].rotation = 0;
+    for (const Combination::Term& term : combination.terms) add_scaled(cases[term.load_case], term.factor, sum);
+    return sum;
+}
+
+/// A moment on a node that has no rotation has nothing to work against.
+std::string describe_lost_moment(const Structure& structure) {
+    for (const LoadCase& load_case : structure.model->cases)
+        for (const NodeLoad& load : load_case.node_loads)
+            if (load.moment != 0 && !structure.has_rotation[load.node])
+                return fmt::format("the structure is a mechanism: the moment of case {} at node {} turns it freely. What lets it: "
+                                   "every member there is released in moment and no support holds the rotation. Put the "
+                                   "moment on a member, or take one release away.",
+                                   load_case.name, node_name(structure, load.node));
+    return {};
+}
+
+std::string describe_all(const Structure& structure, const std::vector<Shape>& mechanisms) {
+    constexpr std::size_t most_told = 5;
+    std::string text;
+    for (std::size_t k = 0; k < std::min(mechanisms.size(), most_told); ++k) {
+        if (k > 0) text += '\n';
+        text += describe_mechanism(structure, mechanisms[k]);
+    }
+    if (mechanisms.size() > most_told) text += fmt::format("\nand {} more ways to move.", mechanisms.size() - most_told);
+    return text;
+}
+
+void warn(Analysis& analysis) {
+    if (analysis.verification.residual > 1e-9)
+        analysis.warnings.push_back(fmt::format("the residual of {:.1e} is larger than round-off: stiffnesses differ so much that "
+                                                "small forces may be wrong; check members and springs for slips of units.",
+                                                analysis.verification.residual));
+    if (analysis.verification.condition > 1e13)
+        analysis.warnings.push_back(fmt::format("the stiffness is badly conditioned ({:.1e}): the structure is close to a "
+                                                "mechanism; check for nearly free directions.",
+                                                analysis.verification.condition));
+}
+
+} // namespace
+
+Outcome analyse(const Model& model) {
+    Outcome outcome;
+    const auto internals = std::make_shared<Internals>(Internals{number_structure(model), CaseLoads(model)});
+    const Structure& structure = internals->structure;
+    outcome.refusal.message = describe_self_mechanisms(structure);
+    if (outcome.refusal.message.empty()) outcome.refusal.message = describe_lost_moment(structure);
+    if (!outcome.refusal.message.empty()) return outcome;
+
+    const BlockMatrix matrix = assemble(structure);
+    const Factor factor(matrix);
+    const MechanismSearch search = find_mechanisms(structure, matrix, factor);
+    if (!search.mechanisms.empty()) {
+        outcome.refusal.message = describe_all(structure, search.mechanisms);
+        return outcome;
+    }
+    Analysis analysis;
+    analysis.model = &model;
+    analysis.internals = internals;
+    for (int k = 0; k < static_cast<int>(model.cases.size()); ++k)
+        analysis.cases.push_back(solve_case(*internals, factor, search.soft, k, analysis.verification));
+    for (const Combination& combination : model.combinations)
+        analysis.combinations.push_back(superpose(analysis.cases, combination));
+    analysis.verification.condition = scaled_condition(structure, matrix, factor, search.soft);
+    analysis.strength = envelope(analysis, LimitState::strength);
+    analysis.service = envelope(analysis, LimitState::service);
+    warn(analysis);
+    outcome.analysis = std::move(analysis);
+    return outcome;
+}
+
+} // namespace groundsill

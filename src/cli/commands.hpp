@@ -1,0 +1,25 @@
+#pragma once
+// The commands, each from its options to an exit code.
+
+#include <string>
+
+namespace groundsill::cli {
+
+struct RunOptions {
+    std::string model;
+    std::string json; ///< a file, "-" for the standard output, or empty
+    std::string csv;  ///< a directory, or empty
+    int places = 20;
+};
+
+/// Reads, analyses and writes what was asked for. \throws OutputError
+int run_command(const RunOptions& options);
+
+/// Prints the model as it is understood. \throws OutputError
+int sketch_command(const std::string& model);
+
+/// Writes a starter model to a file, or to the standard output where `file` is empty; never over an existing file.
+/// \throws OutputError
+int new_command(const std::string& kind, const std::string& file);
+
+} // namespace groundsill::cli

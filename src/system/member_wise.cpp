@@ -1,0 +1,157 @@
+#include "system/member_wise.hpp"
+
+#include <algorithm>
+#include <cmath>
+
+namespace groundsill {
+
+using elements::Basic;
+using elements::FixedEnd;
+using elements::State;
+
+namespace {
+
+/// x and y of a node in global axes, from values in the node's own axes.
+struct Vector {
+    Real x = 0;
+    Real y = 0;
+};
+
+Vector to_global(const TurnedAxes* axes, Real first, Real second) {
+    if (!axes) return {first, second};
+    return {axes->cosine * first - axes->sine * second, axes->sine * first + axes->cosine * second};
+}
+
+Vector to_node(const TurnedAxes* axes, Real x, Real y) {
+    if (!axes) return {x, y};
+    return {axes->cosine * x + axes->sine * y, -axes->sine * x + axes->cosine * y};
+}
+
+/// Chord deformations from the differences between the ends and the rotations there.
+Basic deformation(const Segment& segment, Real dx, Real dy, Real rotation_i, Real rotation_j) {
+    const elements::Frame& frame = segment.frame;
+    const Real chord = (-frame.sine * dx + frame.cosine * dy) / frame.length;
+    return {frame.cosine * dx + frame.sine * dy, chord - rotation_i, rotation_j - chord};
+}
+
+Basic deformation(const Structure& structure, const Segment& segment, const std::vector<Real>& x) {
+    const int i = 3 * segment.i, j = 3 * segment.j;
+    const Vector from = to_global(structure.turned_axes(segment.i), x[i], x[i + 1]);
+    const Vector to = to_global(structure.turned_axes(segment.j), x[j], x[j + 1]);
+    return deformation(segment, to.x - from.x, to.y - from.y, x[i + 2], x[j + 2]);
+}
+
+Basic deformation(const Structure& structure, const Segment& segment, const Movements& u) {
+    // differences of the high parts first: they are large and nearly equal
+    const Basic high = deformation(structure, segment, u.high);
+    const Basic low = deformation(structure, segment, u.low);
+    return {high.axial + low.axial, high.first + low.first, high.second + low.second};
+}
+
+/// a + b, or 0 where that is round-off of the two: a force that is not there stays exactly 0.
+Real clean_sum(Real a, Real b) {
+    const Real sum = a + b;
+    return std::abs(sum) < Real(1e-16) * (std::abs(a) + std::abs(b)) ? Real(0) : sum;
+}
+
+/// Adds forces on a segment's ends to the directions of its nodes.
+void scatter(const Structure& structure, const Segment& segment, const EndForces& f, Real factor, std::vector<Real>& values) {
+    const Real c = segment.frame.cosine, s = segment.frame.sine;
+    const Vector at_i = to_node(structure.turned_axes(segment.i), c * f.along_i - s * f.across_i, s * f.along_i + c * f.across_i);
+    const Vector at_j = to_node(structure.turned_axes(segment.j), c * f.along_j - s * f.across_j, s * f.along_j + c * f.across_j);
+    const int i = 3 * segment.i, j = 3 * segment.j;
+    values[i] += factor * at_i.x;
+    values[i + 1] += factor * at_i.y;
+    values[i + 2] += factor * f.moment_i;
+    values[j] += factor * at_j.x;
+    values[j + 1] += factor * at_j.y;
+    values[j + 2] += factor * f.moment_j;
+}
+
+Real largest(const EndForces& f, Real size) {
+    return std::max({std::abs(f.along_i), std::abs(f.across_i), std::abs(f.along_j), std::abs(f.across_j),
+                     std::abs(f.moment_i) / size, std::abs(f.moment_j) / size});
+}
+
+} // namespace
+
+void Movements::add(int direction, Real value) {
+    // Knuth's two-sum: what the rounded sum loses goes into the low part
+    Real& a = high[direction];
+    const Real sum = a + value;
+    const Real part = sum - a;
+    low[direction] += (a - (sum - part)) + (value - part);
+    a = sum;
+}
+
+Basic basic_forces(const Structure& structure, const Segment& segment, const Movements& u, const FixedEnd* fixed) {
+    const Basic q = segment.stiffness * deformation(structure, segment, u);
+    if (!fixed) return q;
+    return {clean_sum(q.axial, fixed->q.axial), clean_sum(q.first, fixed->q.first), clean_sum(q.second, fixed->q.second)};
+}
+
+EndForces end_forces(const Segment& segment, const Basic& q, const FixedEnd* fixed) {
+    const Real shear = (q.second - q.first) / segment.frame.length;
+    EndForces f{-q.axial, shear, -q.first, q.axial, -shear, q.second};
+    if (fixed) {
+        f.across_i = clean_sum(shear, fixed->V0);
+        f.along_j = clean_sum(q.axial, -fixed->P);
+        f.across_j = clean_sum(-shear, -fixed->VL);
+    }
+    return f;
+}
+
+State end_state(const Structure& structure, const Segment& segment, bool at_end, const Movements& u) {
+    const int node = at_end ? segment.j : segment.i;
+    const Vector g = to_global(structure.turned_axes(node), u.value(3 * node), u.value(3 * node + 1));
+    State state;
+    state.along = segment.frame.cosine * g.x + segment.frame.sine * g.y;
+    state.across = -segment.frame.sine * g.x + segment.frame.cosine * g.y;
+    state.rotation = u.value(3 * node + 2);
+    return state;
+}
+
+std::vector<Real> residual(const Structure& structure, const LoadVector& loads, const Movements& u, Real& scale) {
+    std::vector<Real> r = loads.nodal;
+    scale = 0;
+    for (int d = 0; d < structure.directions(); ++d) {
+        scale = std::max(scale, std::abs(r[d]) / (d % 3 == 2 ? structure.size : Real(1)));
+        if (structure.spring[d] != 0) r[d] -= structure.spring[d] * u.value(d);
+    }
+    for (std::size_t k = 0; k < structure.segments.size(); ++k) {
+        const Segment& segment = structure.segments[k];
+        const FixedEnd* fixed = loads.fixed.empty() ? nullptr : &loads.fixed[k];
+        const EndForces f = end_forces(segment, basic_forces(structure, segment, u, fixed), fixed);
+        scale = std::max(scale, largest(f, structure.size));
+        scatter(structure, segment, f, -1, r);
+    }
+    return r;
+}
+
+void apply_stiffness(const Structure& structure, const std::vector<Real>& x, std::vector<Real>& y) {
+    for (int d = 0; d < structure.directions(); ++d) y[d] = structure.spring[d] == 0 ? Real(0) : structure.spring[d] * x[d];
+    for (const Segment& segment : structure.segments) {
+        const Basic q = segment.stiffness * deformation(structure, segment, x);
+        scatter(structure, segment, end_forces(segment, q, nullptr), 1, y);
+    }
+    for (int d = 0; d < structure.directions(); ++d)
+        if (!structure.active[d]) y[d] = 0;
+}
+
+Real strain_energy(const Structure& structure, const std::vector<Real>& x, const std::vector<Real>& y) {
+    Real energy = 0;
+    for (int d = 0; d < structure.directions(); ++d)
+        if (structure.spring[d] != 0) energy += structure.spring[d] * x[d] * y[d];
+    for (const Segment& segment : structure.segments) {
+        const Basic qx = segment.stiffness * deformation(structure, segment, x);
+        const Basic qy = segment.stiffness * deformation(structure, segment, y);
+        if (segment.stiffness.axial != 0) energy += qx.axial * qy.axial / segment.stiffness.axial;
+        // qᵀ F q instead of qᵀ e: where a release lets e pass without force, round-off comes in squared
+        const elements::BendingFlexibility f = elements::end_moment_flexibility(segment.frame);
+        energy += f.f11 * qx.first * qy.first + f.f12 * (qx.first * qy.second + qx.second * qy.first) +
+                  f.f22 * qx.second * qy.second;
+    }
+    return energy;
+}
+
+} // namespace groundsill
