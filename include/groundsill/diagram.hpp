@@ -20,6 +20,7 @@ template <int Degree> using Polynomial = std::array<double, Degree + 1>;
 struct DiagramPiece {
     double from = 0; ///< m from the member's start
     double to = 0;
+    bool jump = false; ///< a point load stands at `from`: N, V or M jump there
     Polynomial<2> N{};
     Polynomial<2> V{};
     Polynomial<3> M{};
@@ -44,7 +45,8 @@ struct DiagramRange {
     DiagramExtreme min;
 };
 
-enum class Quantity { N, V, M, across };
+/// The functions of a diagram whose extremes can be asked for.
+enum class Curve { N, V, M, across };
 
 /// The diagrams of a whole member. Loads at its very ends act outside of it: the functions are those inside.
 struct Diagram {
@@ -62,7 +64,7 @@ struct Diagram {
 
     /// Exact largest and smallest value: from the functions' own turning points; on a plateau the smallest place.
     /// \param tolerance differences up to this count as a plateau (round-off)
-    DiagramRange extremes(Quantity quantity, double tolerance) const;
+    DiagramRange extremes(Curve curve, double tolerance) const;
 };
 
 } // namespace groundsill

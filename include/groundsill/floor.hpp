@@ -145,9 +145,12 @@ Diagnostics check_floor(const FloorModel& floor);
 /// Screens the floor by each of its methods, one result a method in the order of the file.
 /// DG11: peak acceleration over g of the beam panel or, with a girder, of the combined panel. EN 1995: the governing
 /// one of frequency, deflection under 1 kN and unit impulse velocity response. CCIP-016: the largest response factor
-/// over the paces. Walker and receiver stand together where each mode's vertical movement on the floor is largest. \pre
-/// check_floor has no errors; input.modes rise; span, bending_stiffness and mass_per_length are above 0 \return results
-/// without value, not passed and with a warning, when no mode is vertical
+/// over the paces. Walker and receiver stand together where each mode's vertical movement on the floor is largest.
+///
+/// \pre check_floor has no errors; input.modes rise; span, bending_stiffness, mass_per_length and, for EN 1995,
+///      point_deflection are above 0
+///
+/// \return results without value, not passed and with a warning, when no mode is vertical
 std::vector<FloorResult> screen_floor(const FloorModel& floor, const FloorInput& input);
 
 } // namespace groundsill

@@ -170,6 +170,20 @@ struct Combination {
     Position position;
 };
 
+/// What becomes mass, and how many natural modes are asked for.
+struct MassModel {
+    struct NodeMass {
+        int node = -1;
+        double mass = 0; ///< kg
+        Position position;
+    };
+
+    std::vector<Combination::Term> cases; ///< whose downward loads, times the factor and over g, are mass
+    std::vector<NodeMass> nodes;
+    int modes = 6;
+    Position position;
+};
+
 /// What is printed at the head of every page of a report; empty where the file gives nothing.
 struct Job {
     std::string number, client, revision, by, checked, date;
@@ -190,6 +204,7 @@ struct Model {
     std::vector<Support> supports;
     std::vector<LoadCase> cases;
     std::vector<Combination> combinations;
+    std::optional<MassModel> mass; ///< present: natural frequencies are asked for
 };
 
 /// Checks of a model that need no file: lengths, stiffnesses, loads that lie on their members, properties that a load needs

@@ -26,7 +26,7 @@ struct CsvFile {
     std::function<void(const Sink&)> write;
 };
 
-/// The CSV files of a run, SI units, headers `name [unit]`.
+/// The CSV files of a run, SI units, headers `name [unit]`. The analysis must outlive them.
 std::vector<CsvFile> csv_files(const Analysis& analysis, const WriteOptions& options);
 
 /// The summary for a terminal, in display units.

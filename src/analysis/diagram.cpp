@@ -59,48 +59,38 @@ DiagramPlace Diagram::value_before(double s) const {
 }
 
 std::vector<DiagramPlace> Diagram::places(int parts) const {
-    MemberForces largest;
-    for (const DiagramPiece& piece : pieces)
-        for (const double s : {piece.from, piece.to}) {
-            const MemberForces f = place_on(piece, s).forces;
-            largest = {std::max(largest.N, std::abs(f.N)), std::max(largest.V, std::abs(f.V)), std::max(largest.M, std::abs(f.M))};
-        }
-    const double force = 1e-12 * std::max(largest.N, largest.V);
-    const double moment = 1e-12 * std::max(largest.M, largest.V * length);
+    const double near = same_place * length;
     std::vector<DiagramPlace> listed;
     std::size_t next = 1; // the piece whose start is looked at next
-    const auto list_jumps_up_to = [&](double s) {
-        bool listed_here = false;
-        for (; next < pieces.size() && pieces[next].from <= s + same_place * length; ++next) {
-            const bool here = pieces[next].from >= s - same_place * length;
-            const double at = here ? s : pieces[next].from;
-            DiagramPlace before = place_on(pieces[next - 1], pieces[next - 1].to), after = place_on(pieces[next], pieces[next].from);
-            before.at = after.at = at;
-            if (std::abs(after.forces.N - before.forces.N) <= force && std::abs(after.forces.V - before.forces.V) <= force &&
-                std::abs(after.forces.M - before.forces.M) <= moment)
-                continue;
-            listed.push_back(before);
-            listed.push_back(after);
-            listed_here = listed_here || here;
+    // lists the jumps up to s; true when there is one at s itself
+    const auto list_jumps = [&](double s) {
+        bool at_s = false;
+        for (; next < pieces.size() && pieces[next].from <= s + near; ++next) {
+            if (!pieces[next].jump) continue;
+            const bool here = pieces[next].from >= s - near;
+            listed.push_back(place_on(pieces[next - 1], pieces[next - 1].to));
+            listed.push_back(place_on(pieces[next], pieces[next].from));
+            if (here) listed.back().at = (listed.end() - 2)->at = s;
+            at_s = at_s || here;
         }
-        return listed_here;
+        return at_s;
     };
     for (int k = 0; k <= parts; ++k) {
         const double s = k == parts ? length : length * k / parts;
-        if (!list_jumps_up_to(s)) listed.push_back(k == parts ? value_before(s) : value(s));
+        if (!list_jumps(s)) listed.push_back(k == parts ? value_before(s) : value(s));
     }
     return listed;
 }
 
-DiagramRange Diagram::extremes(Quantity quantity, double tolerance) const {
+DiagramRange Diagram::extremes(Curve curve, double tolerance) const {
     Search search;
     search.tolerance = tolerance;
     for (const DiagramPiece& piece : pieces) {
-        switch (quantity) {
-        case Quantity::N: search.offer(piece.N, piece); break;
-        case Quantity::V: search.offer(piece.V, piece); break;
-        case Quantity::M: search.offer(piece.M, piece); break;
-        case Quantity::across: search.offer(piece.across, piece); break;
+        switch (curve) {
+        case Curve::N: search.offer(piece.N, piece); break;
+        case Curve::V: search.offer(piece.V, piece); break;
+        case Curve::M: search.offer(piece.M, piece); break;
+        case Curve::across: search.offer(piece.across, piece); break;
         }
     }
     return search.range;

@@ -21,26 +21,26 @@ void offer_reaction(const Reaction& r, int combination, Envelope::OfReaction& ke
 }
 
 /// The values at an extreme; at a jump those on the side that has it.
-MemberForces forces_at(const Diagram& diagram, Quantity quantity, const DiagramExtreme& extreme) {
+MemberForces forces_at(const Diagram& diagram, Curve curve, const DiagramExtreme& extreme) {
     const MemberForces after = diagram.value(extreme.at).forces, before = diagram.value_before(extreme.at).forces;
     const auto distance = [&](const MemberForces& f) {
-        return std::abs((quantity == Quantity::N ? f.N : quantity == Quantity::V ? f.V : f.M) - extreme.value);
+        return std::abs((curve == Curve::N ? f.N : curve == Curve::V ? f.V : f.M) - extreme.value);
     };
     return distance(before) < distance(after) ? before : after;
 }
 
 void offer_member(const Diagram& diagram, int combination, Envelope::OfMember& kept) {
-    const auto offer_one = [&](Quantity quantity, LeastMost<ForceExtreme>& into, double tolerance) {
-        const DiagramRange range = diagram.extremes(quantity, tolerance);
+    const auto offer_one = [&](Curve curve, LeastMost<ForceExtreme>& into, double tolerance) {
+        const DiagramRange range = diagram.extremes(curve, tolerance);
         for (const DiagramExtreme& extreme : {range.max, range.min})
-            offer({extreme.value, extreme.at, combination, forces_at(diagram, quantity, extreme)}, tolerance, into);
+            offer({extreme.value, extreme.at, combination, forces_at(diagram, curve, extreme)}, tolerance, into);
     };
     double force = 0;
     for (const DiagramPiece& piece : diagram.pieces)
         force = std::max({force, std::abs(piece.N[0]), std::abs(piece.V[0]), std::abs(piece.M[0]) / diagram.length});
-    offer_one(Quantity::N, kept.N, 1e-12 * force);
-    offer_one(Quantity::V, kept.V, 1e-12 * force);
-    offer_one(Quantity::M, kept.M, 1e-12 * force * diagram.length);
+    offer_one(Curve::N, kept.N, 1e-12 * force);
+    offer_one(Curve::V, kept.V, 1e-12 * force);
+    offer_one(Curve::M, kept.M, 1e-12 * force * diagram.length);
 }
 
 } // namespace

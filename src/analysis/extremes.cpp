@@ -81,21 +81,21 @@ template <std::size_t Count> double bound(const std::array<double, Count>& coeff
     return sum;
 }
 
-double bound(const Diagram& diagram, Quantity quantity) {
+double bound(const Diagram& diagram, Curve curve) {
     double largest = 0;
     for (const DiagramPiece& piece : diagram.pieces) {
         const double length = piece.to - piece.from;
-        switch (quantity) {
-        case Quantity::N:
+        switch (curve) {
+        case Curve::N:
             raise(largest, bound(piece.N, length));
             break;
-        case Quantity::V:
+        case Curve::V:
             raise(largest, bound(piece.V, length));
             break;
-        case Quantity::M:
+        case Curve::M:
             raise(largest, bound(piece.M, length));
             break;
-        case Quantity::across:
+        case Curve::across:
             raise(largest, bound(piece.across, length));
             break;
         }
@@ -103,22 +103,22 @@ double bound(const Diagram& diagram, Quantity quantity) {
     return largest;
 }
 
-double own_rounding(Quantity quantity, const RoundOff& rounding, double length) {
-    switch (quantity) {
-    case Quantity::N:
-    case Quantity::V:
+double own_rounding(Curve curve, const RoundOff& rounding, double length) {
+    switch (curve) {
+    case Curve::N:
+    case Curve::V:
         return rounding.force;
-    case Quantity::M:
+    case Curve::M:
         return std::max(rounding.moment, rounding.force * length);
-    case Quantity::across:
+    case Curve::across:
         break;
     }
     return rounding.movement;
 }
 
-DiagramRange range_below(const Diagram& diagram, Quantity quantity, const RoundOff& rounding, double largest) {
-    const double tolerance = std::max(own_rounding(quantity, rounding, diagram.length), relative_rounding * largest);
-    return diagram.extremes(quantity, tolerance);
+DiagramRange range_below(const Diagram& diagram, Curve curve, const RoundOff& rounding, double largest) {
+    const double tolerance = std::max(own_rounding(curve, rounding, diagram.length), relative_rounding * largest);
+    return diagram.extremes(curve, tolerance);
 }
 
 /// The diagram whose `across` is the movement along the direction (c along + s across).
@@ -160,25 +160,25 @@ bool cannot_change(const LeastMost<Peak>& peaks, double largest) {
 }
 
 /// Searches one diagram, unless its bound tells that nothing larger can be in it.
-void search(LeastMost<Peak>& peaks, const Diagram& diagram, Quantity quantity, const RoundOff& rounding,
+void search(LeastMost<Peak>& peaks, const Diagram& diagram, Curve curve, const RoundOff& rounding,
             const Place& place) {
-    const double largest = bound(diagram, quantity);
+    const double largest = bound(diagram, curve);
     if (cannot_change(peaks, largest)) return;
-    offer(peaks, range_below(diagram, quantity, rounding, largest), place,
-          own_rounding(quantity, rounding, diagram.length));
+    offer(peaks, range_below(diagram, curve, rounding, largest), place,
+          own_rounding(curve, rounding, diagram.length));
 }
 
 void search_forces(Peaks& peaks, const Diagram& diagram, const RoundOff& rounding, const Place& place) {
-    search(peaks.N, diagram, Quantity::N, rounding, place);
-    search(peaks.V, diagram, Quantity::V, rounding, place);
-    search(peaks.M, diagram, Quantity::M, rounding, place);
+    search(peaks.N, diagram, Curve::N, rounding, place);
+    search(peaks.V, diagram, Curve::V, rounding, place);
+    search(peaks.M, diagram, Curve::M, rounding, place);
 }
 
 void search_movements(Peaks& peaks, const Diagram& diagram, const Model& model, const RoundOff& rounding,
                       const Place& place) {
     const auto [length, c, s] = line_of(model, model.members[place.member]);
-    search(peaks.x, movement_towards(diagram, c, -s), Quantity::across, rounding, place);
-    search(peaks.y, movement_towards(diagram, s, c), Quantity::across, rounding, place);
+    search(peaks.x, movement_towards(diagram, c, -s), Curve::across, rounding, place);
+    search(peaks.y, movement_towards(diagram, s, c), Curve::across, rounding, place);
 }
 
 void search_nodes(Peaks& peaks, const Model& model, const Response& response, int index, const RoundOff& rounding) {
@@ -234,8 +234,8 @@ RoundOff round_off(const Analysis& analysis, const Response& response) {
     return {part * largest.force, part * largest.moment, relative_rounding * largest.movement};
 }
 
-DiagramRange member_range(const Diagram& diagram, Quantity quantity, const RoundOff& rounding) {
-    return range_below(diagram, quantity, rounding, bound(diagram, quantity));
+DiagramRange member_range(const Diagram& diagram, Curve curve, const RoundOff& rounding) {
+    return range_below(diagram, curve, rounding, bound(diagram, curve));
 }
 
 bool speaks_of_combinations(const Analysis& analysis) { return !analysis.combinations.empty(); }

@@ -22,7 +22,7 @@ struct RoundOff {
 RoundOff round_off(const Analysis& analysis, const Response& response);
 
 /// Exact extremes of one quantity along a member; on a plateau the smallest place.
-DiagramRange member_range(const Diagram& diagram, Quantity quantity, const RoundOff& rounding);
+DiagramRange member_range(const Diagram& diagram, Curve curve, const RoundOff& rounding);
 
 /// Whether the tables of a run speak of its combinations; of its cases where it has no combinations.
 bool speaks_of_combinations(const Analysis& analysis);

@@ -1,6 +1,7 @@
 #pragma once
 // Polynomials of low degree: values and real roots in an interval.
 
+#include <algorithm>
 #include <array>
 #include <cmath>
 #include <cstddef>
@@ -39,14 +40,23 @@ template <std::size_t Most> struct Roots {
     }
 };
 
-/// The root between a and b, where the polynomial changes its sign: bisection to the last bit.
-template <std::size_t Size> double bisect(const std::array<double, Size>& c, double a, double b) {
+/// The root between a and b, where the polynomial changes its sign once: Newton's steps, halving where one leaves the bracket,
+/// until the bracket or the step is at the last bits.
+template <std::size_t Size> double root_between(const std::array<double, Size>& c, double a, double b) {
+    const auto slope = derivative_of(c);
     const bool rising = value_of(c, a) < 0;
-    while (true) {
-        const double middle = a + (b - a) / 2;
-        if (!(middle > a && middle < b)) return middle;
-        ((value_of(c, middle) < 0) == rising ? a : b) = middle;
+    const double last_bits = 4e-16 * std::max(std::abs(a), std::abs(b));
+    double root = a + (b - a) / 2;
+    for (int step = 0; step < 200; ++step) {
+        const double value = value_of(c, root);
+        if (value == 0) return root;
+        ((value < 0) == rising ? a : b) = root;
+        double next = root - value / value_of(slope, root);
+        if (!(next > a && next < b)) next = a + (b - a) / 2;
+        if (std::abs(next - root) <= last_bits) return next;
+        root = next;
     }
+    return root;
 }
 
 /// Real roots strictly inside (0, end) at which the polynomial changes its sign. Between two neighbouring roots of its
@@ -61,7 +71,7 @@ template <std::size_t Size> Roots<Size - 1> roots_inside(const std::array<double
         for (std::size_t k = 0; k <= turns.count; ++k) {
             const double to = k < turns.count ? turns.values[k] : end;
             const double at_from = value_of(c, from), at_to = value_of(c, to);
-            if ((at_from < 0 && at_to > 0) || (at_from > 0 && at_to < 0)) roots.add(bisect(c, from, to));
+            if ((at_from < 0 && at_to > 0) || (at_from > 0 && at_to < 0)) roots.add(root_between(c, from, to));
             else if (at_to == 0 && k < turns.count) roots.add(to);
             from = to;
         }

@@ -64,13 +64,8 @@ LoadVector make_load_vector(const Internals& internals, int index, const std::ve
     return loads;
 }
 
-/// The size of forces below which a reaction is round-off: 1e-16 of the largest load, fixed-end force or end force.
-Real noise_of(const Structure& structure, const LoadVector& loads, Real scale) {
-    for (const elements::FixedEnd& fixed : loads.fixed)
-        scale = std::max({scale, std::abs(fixed.q.axial), std::abs(fixed.V0), std::abs(fixed.VL),
-                          std::abs(fixed.q.first) / structure.size, std::abs(fixed.q.second) / structure.size});
-    return Real(1e-16) * scale;
-}
+/// A force below the noise is none.
+Real cleaned(Real force, Real noise) { return std::abs(force) < noise ? Real(0) : force; }
 
 Reaction reaction_of(const Structure& structure, const Support& support, const std::vector<Real>& missing,
                      const std::vector<Real>& imposed, const Movements& u, Real noise) {
@@ -80,7 +75,7 @@ Reaction reaction_of(const Structure& structure, const Support& support, const s
         const int d = 3 * support.node + c;
         if (restraints[c]->is_fixed()) force[c] = -missing[d];
         if (restraints[c]->is_elastic()) force[c] = -restraints[c]->stiffness * ((u.high[d] - imposed[d]) + u.low[d]);
-        if (std::abs(force[c]) < noise * (c == 2 ? structure.size : Real(1))) force[c] = 0;
+        force[c] = cleaned(force[c], noise * (c == 2 ? structure.size : Real(1)));
     }
     if (const TurnedAxes* axes = structure.turned_axes(support.node)) {
         const Real x = axes->cosine * force[0] - axes->sine * force[1];
@@ -103,13 +98,17 @@ NodeMovement movement_of(const Structure& structure, int node, const Movements& 
 }
 
 /// \param acting, loading room to work in
+/// \param noise size of forces that are round-off
 SegmentState state_of(const Internals& internals, int load_case, const Segment& segment, const elements::FixedEnd* fixed,
-                      const Movements& u, elements::SegmentLoads& acting, elements::Loading& loading) {
+                      const Movements& u, Real noise, elements::SegmentLoads& acting, elements::Loading& loading) {
     const Structure& structure = internals.structure;
-    const EndForces f = end_forces(segment, basic_forces(structure, segment, u, fixed), fixed);
+    const EndForces f = end_forces(basic_forces(structure, segment, u), fixed);
     acting.clear();
     if (fixed) internals.loads.add(structure, load_case, 1, segment, acting);
-    elements::State start{-f.along_i, f.across_i, -f.moment_i, 0, 0, 0};
+    elements::State start;
+    start.N = cleaned(-f.along_i, noise);
+    start.V = cleaned(f.across_i, noise);
+    start.M = cleaned(-f.moment_i, noise * structure.size);
     elements::cut(acting, segment.frame.length, loading);
     elements::place_start(segment.frame, loading, end_state(structure, segment, false, u),
                           end_state(structure, segment, true, u), start);
@@ -119,16 +118,17 @@ SegmentState state_of(const Internals& internals, int load_case, const Segment& 
 
 /// The finished response of a case from its movements.
 Response respond(const Internals& internals, int load_case, const LoadVector& loads, const std::vector<Real>& imposed,
-                 const Movements& u) {
+                 const Refined& refined) {
     const Structure& structure = internals.structure;
     const Model& model = *structure.model;
+    const Movements& u = refined.u;
+    const Real noise = Real(1e-19) * refined.held;
     Response response;
     response.movements.reserve(model.nodes.size());
     for (int node = 0; node < static_cast<int>(model.nodes.size()); ++node)
         response.movements.push_back(movement_of(structure, node, u));
     Real scale = 0;
     const std::vector<Real> missing = residual(structure, loads, u, scale);
-    const Real noise = noise_of(structure, loads, scale);
     for (const Support& support : model.supports)
         response.reactions.push_back(reaction_of(structure, support, missing, imposed, u, noise));
     response.segments.reserve(structure.segments.size());
@@ -136,7 +136,7 @@ Response respond(const Internals& internals, int load_case, const LoadVector& lo
     elements::Loading loading;
     for (std::size_t k = 0; k < structure.segments.size(); ++k)
         response.segments.push_back(state_of(internals, load_case, structure.segments[k],
-                                             loads.fixed.empty() ? nullptr : &loads.fixed[k], u, acting, loading));
+                                             loads.fixed.empty() ? nullptr : &loads.fixed[k], u, noise, acting, loading));
     return response;
 }
 
@@ -150,7 +150,7 @@ Response solve_case(const Internals& internals, const Factor& factor, const Soft
         if (!structure.active[d]) given.high[d] = imposed[d];
     const Refined refined = refine(structure, factor, soft, loads, given);
     verification.residual = std::max(verification.residual, refined.residual);
-    Response response = respond(internals, load_case, loads, imposed, refined.u);
+    Response response = respond(internals, load_case, loads, imposed, refined);
     verification.equilibrium = std::max(verification.equilibrium, imbalance(internals, load_case, response));
     return response;
 }

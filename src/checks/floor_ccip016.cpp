@@ -59,8 +59,7 @@ std::vector<double> paces_of(const FloorModel::Footfall& footfall, const std::ve
         }
     }
     std::ranges::sort(paces);
-    const auto doubles = std::ranges::unique(paces);
-    paces.erase(doubles.begin(), doubles.end());
+    paces.erase(std::unique(paces.begin(), paces.end()), paces.end());
     return paces;
 }
 

@@ -3,7 +3,6 @@
 #include <algorithm>
 #include <array>
 #include <cctype>
-#include <span>
 #include <vector>
 
 #include <fmt/format.h>
@@ -95,6 +94,7 @@ const Outside* outside_activity(const std::string& use) {
 
 template <class Row, std::size_t Count> std::vector<std::string_view> words(const std::array<Row, Count>& table) {
     std::vector<std::string_view> list;
+    list.reserve(Count);
     for (const Row& row : table) list.push_back(row.use);
     return list;
 }

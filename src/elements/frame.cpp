@@ -32,6 +32,29 @@ BendingSpace bending_space(const Frame& frame) {
     return {};
 }
 
+ShearPath shear_path(const Frame& frame) {
+    const bool first = frame.start.moment.is_free(), second = frame.end.moment.is_free();
+    if (any_shear_free(frame) || (first && second)) return {};
+    const Real L = frame.length;
+    const Real b = L * frame.bending_flexibility / 6;
+    const Real start = flexibility_of(frame.start.moment), end = flexibility_of(frame.end.moment);
+    ShearPath path{.passes = true};
+    Real turning = 0;
+    if (first) {
+        turning = 2 * b + end;
+    } else if (second) {
+        path.share = 1;
+        turning = 2 * b + start;
+    } else {
+        // both moments act: e1 + e2 = 0 while only the chord turns
+        path.share = (3 * b + end) / (6 * b + start + end);
+        turning = (3 * b * b + 2 * b * (start + end) + start * end) / (6 * b + start + end);
+    }
+    path.bending = turning + frame.shear_flexibility / L;
+    path.flexibility = path.bending + (flexibility_of(frame.start.shear) + flexibility_of(frame.end.shear)) / (L * L);
+    return path;
+}
+
 Real elongation_flexibility(const Frame& frame) {
     return frame.length * frame.axial_flexibility + flexibility_of(frame.start.axial) + flexibility_of(frame.end.axial);
 }
@@ -46,13 +69,18 @@ BasicStiffness basic_stiffness(const Frame& frame) {
     if (space.count == 2) {
         // K = F⁻¹
         const Real inverse = 1 / f.determinant;
-        k = {k.axial, f.f22 * inverse, -f.f12 * inverse, f.f11 * inverse};
+        k = {k.axial, f.f22 * inverse, -f.f12 * inverse, f.f11 * inverse, 0, 0};
     } else if (space.count == 1) {
         // K = Z (Zᵀ F Z)⁻¹ Zᵀ
         const Real flex = space.z1 * space.z1 * f.f11 + 2 * space.z1 * space.z2 * f.f12 + space.z2 * space.z2 * f.f22;
         k.k11 = space.z1 * space.z1 / flex;
         k.k12 = space.z1 * space.z2 / flex;
         k.k22 = space.z2 * space.z2 / flex;
+    }
+    const ShearPath path = shear_path(frame);
+    if (path.passes) {
+        k.v1 = -path.share / (path.flexibility * frame.length);
+        k.v2 = (1 - path.share) / (path.flexibility * frame.length);
     }
     return k;
 }

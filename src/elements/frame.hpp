@@ -32,22 +32,33 @@ struct Frame {
     Release end;
 };
 
-/// Chord deformations eN, e1, e2, or the forces N, M1, M2 that belong to them.
-struct Basic {
+/// Deformations of the chord: eN, e1, e2.
+struct Deformation {
     Real axial = 0;
     Real first = 0;
     Real second = 0;
 };
 
-/// q = K e: the symmetric stiffness of the chord deformations; axial and bending do not couple.
+/// The forces that go with them: N at the start, M1, M2, and the shear force V that is the same all along while no load acts.
+/// V is (M2 - M1)/L, but kept apart: where a soft shear release makes it small, that difference would be all round-off.
+struct BasicForces {
+    Real N = 0;
+    Real M1 = 0;
+    Real M2 = 0;
+    Real V = 0;
+};
+
+/// q = K e: the symmetric stiffness of the chord deformations, and V = v1 e1 + v2 e2. Axial and bending do not couple.
 struct BasicStiffness {
     Real axial = 0;
     Real k11 = 0;
     Real k12 = 0;
     Real k22 = 0;
+    Real v1 = 0;
+    Real v2 = 0;
 
-    Basic operator*(const Basic& e) const {
-        return {axial * e.axial, k11 * e.first + k12 * e.second, k12 * e.first + k22 * e.second};
+    BasicForces operator*(const Deformation& e) const {
+        return {axial * e.axial, k11 * e.first + k12 * e.second, k12 * e.first + k22 * e.second, v1 * e.first + v2 * e.second};
     }
 };
 
@@ -67,7 +78,16 @@ struct BendingFlexibility {
     Real determinant = 0; ///< f11 f22 - f12², summed from positive terms
 };
 
+/// How a movement of one end across the segment works while the ends cannot turn more than their releases let them.
+struct ShearPath {
+    bool passes = false; ///< whether a shear force can pass from end to end without loads
+    Real share = 0;      ///< M1 = -share L V and M2 = (1 - share) L V go with the shear force V
+    Real bending = 0;    ///< movement per V L from bending and shear deformation, m/(N m)
+    Real flexibility = 0; ///< with the elastic shear releases added
+};
+
 BendingFlexibility end_moment_flexibility(const Frame& frame);
+ShearPath shear_path(const Frame& frame);
 BendingSpace bending_space(const Frame& frame);
 
 /// Flexibility of the axial force, eN = f N; meaningless where a release is axially free.

@@ -117,22 +117,64 @@ State simply_supported_start(const Frame& frame, const Loading& loading) {
     return start;
 }
 
+/// Shear forces at the two ends of the simply supported segment.
+struct Shears {
+    Real start = 0;
+    Real end = 0;
+};
+
 /// The end moments that free releases alone demand (the particular part of q).
-Basic particular(const Frame& frame, const FixedEnd& simple) {
-    Basic q;
+BasicForces particular(const Frame& frame, const Shears& simple) {
+    BasicForces q;
     const bool start_shear = frame.start.shear.is_free();
     if (!start_shear && !frame.end.shear.is_free()) return q;
     // V = 0 at the free end: M2 - M1 = -V0 L, with the simply supported shear at that end
-    const Real difference = -(start_shear ? simple.V0 : simple.VL) * frame.length;
+    const Real difference = -(start_shear ? simple.start : simple.end) * frame.length;
     if (frame.start.moment.is_free()) {
-        q.second = difference;
+        q.M2 = difference;
     } else if (frame.end.moment.is_free()) {
-        q.first = -difference;
+        q.M1 = -difference;
     } else {
-        q.first = -difference / 2;
-        q.second = difference / 2;
+        q.M1 = -difference / 2;
+        q.M2 = difference / 2;
     }
     return q;
+}
+
+/// Fixed-end moments: e = F (p + Z r) + e0 = 0, seen by the moments that can pass.
+void set_moments(const Frame& frame, const Shears& simple, const LoadWork& work, FixedEnd& fixed) {
+    const Real slips =
+        (flexibility_of(frame.start.shear) * simple.start + flexibility_of(frame.end.shear) * simple.end) / frame.length;
+    const BasicForces p = particular(frame, simple);
+    const BendingFlexibility f = end_moment_flexibility(frame);
+    const Real gap1 = work.first - slips + f.f11 * p.M1 + f.f12 * p.M2;
+    const Real gap2 = work.second + slips + f.f12 * p.M1 + f.f22 * p.M2;
+    const BasicStiffness k = basic_stiffness(frame);
+    fixed.q.M1 = p.M1 - (k.k11 * gap1 + k.k12 * gap2);
+    fixed.q.M2 = p.M2 - (k.k12 * gap1 + k.k22 * gap2);
+}
+
+/// Fixed-end shears. Where a shear passes between the ends it is found from the movement that it must undo, not as a difference
+/// of moments: with a soft shear release it is small beside them.
+void set_shears(const Frame& frame, const Shears& simple, const LoadWork& work, FixedEnd& fixed) {
+    const Real total = simple.end - simple.start; // all loads across
+    if (frame.start.shear.is_free() || frame.end.shear.is_free()) {
+        fixed.V_start = frame.start.shear.is_free() ? Real(0) : -total;
+        fixed.V_end = frame.end.shear.is_free() ? Real(0) : total;
+        return;
+    }
+    const ShearPath path = shear_path(frame);
+    if (!path.passes) {
+        fixed.V_start = simple.start;
+        fixed.V_end = simple.end;
+        return;
+    }
+    // per L: bending (V - V0) + slips of both ends + the end rotations that the loads make = 0
+    const Real turn = ((1 - path.share) * work.second - path.share * work.first) / frame.length;
+    const Real squared = frame.length * frame.length;
+    const Real slip_start = flexibility_of(frame.start.shear) / squared, slip_end = flexibility_of(frame.end.shear) / squared;
+    fixed.V_start = (simple.start * path.bending - slip_end * total - turn) / path.flexibility;
+    fixed.V_end = (simple.end * path.bending + slip_start * total - turn) / path.flexibility;
 }
 
 } // namespace
@@ -175,29 +217,15 @@ FixedEnd fixed_end(const Frame& frame, const Loading& loading) {
         state = advance(frame, loading, piece, state, piece.to - piece.from);
     }
     fixed.P = loading.end_P - state.N;
-    fixed.V0 = start.V;
-    fixed.VL = state.V + loading.end_Q;
-
     if (frame.end.axial.is_free()) {
-        fixed.q.axial = fixed.P;
+        fixed.q.N = fixed.P;
     } else if (!frame.start.axial.is_free()) {
         // 0 = f N + ∫ N0/EA + ε0 L - P/k at the end: no elongation between the nodes
-        fixed.q.axial = (fixed.P * flexibility_of(frame.end.axial) - work.stretch) / elongation_flexibility(frame);
+        fixed.q.N = (fixed.P * flexibility_of(frame.end.axial) - work.stretch) / elongation_flexibility(frame);
     }
-
-    const Real slips = (flexibility_of(frame.start.shear) * fixed.V0 + flexibility_of(frame.end.shear) * fixed.VL) / frame.length;
-    const Basic p = particular(frame, fixed);
-    const BendingFlexibility f = end_moment_flexibility(frame);
-    const BendingSpace space = bending_space(frame);
-    // e = F (p + Z r) + e0 = 0, seen by the forces that can pass
-    const Real gap1 = work.first - slips + f.f11 * p.first + f.f12 * p.second;
-    const Real gap2 = work.second + slips + f.f12 * p.first + f.f22 * p.second;
-    fixed.q.first = p.first;
-    fixed.q.second = p.second;
-    if (space.count == 0) return fixed;
-    const BasicStiffness k = basic_stiffness(frame);
-    fixed.q.first -= k.k11 * gap1 + k.k12 * gap2;
-    fixed.q.second -= k.k12 * gap1 + k.k22 * gap2;
+    const Shears simple{start.V, state.V + loading.end_Q};
+    set_moments(frame, simple, work, fixed);
+    set_shears(frame, simple, work, fixed);
     return fixed;
 }
 
@@ -212,22 +240,29 @@ void place_start(const Frame& frame, const Loading& loading, const State& node_i
         start.along = node_j.along - free_end.N * flexibility_of(frame.end.axial) - free_end.along;
     }
 
-    // What the attached connections say of the segment's own ends; a free one says nothing.
+    // What the attached connections say of the segment's own ends. A gap is force over stiffness, so that a soft spring says
+    // little: its force is a small difference. Both shears place the segment unless one is far softer than the segment itself.
+    const Real soft = 10 * L * L * L * frame.bending_flexibility;
+    const auto places = [&](const Restraint& restraint, Real limit) {
+        return !restraint.is_free() && flexibility_of(restraint) <= limit;
+    };
     const Real across_i = node_i.across - start.V * flexibility_of(frame.start.shear);
     const Real across_j = node_j.across + free_end.V * flexibility_of(frame.end.shear);
-    const bool start_held = !frame.start.shear.is_free();
-    const bool end_held = !frame.end.shear.is_free();
-    if (start_held && end_held) {
+    const bool start_moment = places(frame.start.moment, soft / (L * L)), end_moment = places(frame.end.moment, soft / (L * L));
+    const bool by_shears = (places(frame.start.shear, soft) && places(frame.end.shear, soft)) || !(start_moment || end_moment);
+    if (by_shears && !frame.start.shear.is_free() && !frame.end.shear.is_free()) {
         start.across = across_i;
         start.rotation = (across_j - across_i - free_end.across) / L;
         return;
     }
-    if (!frame.start.moment.is_free()) {
+    if (start_moment || (!end_moment && !frame.start.moment.is_free())) {
         start.rotation = node_i.rotation + start.M * flexibility_of(frame.start.moment);
     } else {
         start.rotation = node_j.rotation - free_end.M * flexibility_of(frame.end.moment) - free_end.rotation;
     }
-    start.across = start_held ? across_i : across_j - free_end.across - start.rotation * L;
+    const bool by_start = !frame.start.shear.is_free() &&
+                          (frame.end.shear.is_free() || flexibility_of(frame.start.shear) <= flexibility_of(frame.end.shear));
+    start.across = by_start ? across_i : across_j - free_end.across - start.rotation * L;
 }
 
 void append_diagram(const Frame& frame, const Loading& loading, const State& start, double offset,
@@ -241,6 +276,7 @@ void append_diagram(const Frame& frame, const Loading& loading, const State& sta
         DiagramPiece piece;
         piece.from = offset + d(load.from);
         piece.to = offset + d(load.to);
+        piece.jump = load.P != 0 || load.Q != 0 || load.m != 0;
         piece.N = {d(at.N), d(-load.p0), d(-load.p1 / 2)};
         piece.V = {d(at.V), d(q0), d(q1 / 2)};
         piece.M = {d(at.M), d(at.V), d(q0 / 2), d(q1 / 6)};

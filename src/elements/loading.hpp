@@ -67,10 +67,10 @@ State integrate(const Frame& frame, const Loading& loading, const State& start);
 
 /// Forces passed at the ends when the loads act and no node moves (fixed-end forces).
 struct FixedEnd {
-    Basic q;        ///< N at the start, M1, M2
-    Real P = 0;     ///< N at the start minus N at the end: all loads along
-    Real V0 = 0;    ///< shear at the start of the same segment on simple supports
-    Real VL = 0;    ///< and at its end
+    BasicForces q;     ///< N at the start, M1, M2; V stays 0
+    Real P = 0;        ///< N at the start minus N at the end: all loads along
+    Real V_start = 0;  ///< shear force at the start
+    Real V_end = 0;    ///< and at the end
 };
 
 /// Fixed-end forces by the force method: the simply supported segment under the loads, corrected by q so that the nodes

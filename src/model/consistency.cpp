@@ -123,15 +123,13 @@ void check_sections(const Model& model, const Needs& needs, Findings& findings) 
 }
 
 void check_supports(const Model& model, Findings& findings) {
-    std::unordered_map<int, Position> first;
+    std::vector<bool> supported(model.nodes.size());
     for (const Support& support : model.supports) {
         const std::string& name = at(model.nodes, support.node).name;
-        const auto [before, is_new] = first.emplace(support.node, support.position);
-        if (!is_new) {
-            findings.error(support.position,
-                           fmt::format("node {} has a support already, in line {}: put both into one entry", name,
-                                       before->second.line));
+        if (supported[static_cast<std::size_t>(support.node)]) {
+            findings.error(support.position, fmt::format("node {} has two supports: put both into one entry", name));
         }
+        supported[static_cast<std::size_t>(support.node)] = true;
         const auto check = [&](const Restraint& restraint, const char* direction) {
             if (restraint.is_elastic() && !above_zero(restraint.stiffness)) {
                 findings.error(support.position,

@@ -2,7 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
-#include <compare>
+#include <tuple>
 #include <utility>
 #include <vector>
 
@@ -111,13 +111,15 @@ class Overlaps {
     void find_doubled_members() {
         struct Ends {
             int low, high, member;
-            auto operator<=>(const Ends&) const = default;
         };
         std::vector<Ends> ends;
         ends.reserve(model_.members.size());
         for (int i = 0; const Member& m : model_.members)
             ends.push_back({std::min(m.from, m.to), std::max(m.from, m.to), i++});
-        if (!std::is_sorted(ends.begin(), ends.end())) std::sort(ends.begin(), ends.end());
+        const auto before = [](const Ends& a, const Ends& b) {
+            return std::tie(a.low, a.high, a.member) < std::tie(b.low, b.high, b.member);
+        };
+        if (!std::is_sorted(ends.begin(), ends.end(), before)) std::sort(ends.begin(), ends.end(), before);
         for (std::size_t i = 0, first = 0; i < ends.size(); ++i) {
             if (ends[i].low != ends[first].low || ends[i].high != ends[first].high) first = i;
             if (i != first) note_overlap(ends[i].member, ends[first].member);

@@ -55,31 +55,32 @@ void read_node_names(Fields& fields, std::vector<TomlNode>& names) {
     NameIndex seen;
     for (int i = 0; i < field->node().size(); ++i) {
         const TomlNode node = field->node().element(i);
-        if (node.kind() != TomlKind::text)
-            return fields.error(*field, "takes the names of its nodes in quotation marks");
-        if (node.text().empty() || node.text().find('.') != std::string_view::npos) {
-            return fields.error(*field,
-                                fmt::format("cannot create a node {}: names hold no dots and have at least one letter",
-                                            quoted(node.text())));
+        if (node.kind() != TomlKind::text) {
+            fields.error(*field, "takes the names of its nodes in quotation marks");
+        } else if (node.text().empty() || node.text().find('.') != std::string_view::npos) {
+            fields.error(*field, fmt::format("cannot create a node {}: names hold no dots and have at least one letter",
+                                             quoted(node.text())));
+        } else if (seen.contains(node.text())) {
+            fields.error(*field, fmt::format("passes node {} twice: it runs straight on", quoted(node.text())));
+        } else {
+            seen.add(node.text(), i);
+            names.push_back(node);
         }
-        if (seen.contains(node.text())) {
-            return fields.error(*field, fmt::format("passes node {} twice: it runs straight on", quoted(node.text())));
-        }
-        seen.add(node.text(), i);
-        names.push_back(node);
     }
-    if (names.size() < 2) fields.error(*field, "needs two nodes at least");
+    if (field->node().size() < 2) fields.error(*field, "needs two nodes at least");
 }
 
 /// Sums up the spans; without spans or after an error nothing comes back.
-std::vector<double> read_starts(Fields& fields, std::size_t node_count) {
+std::vector<double> read_starts(Fields& fields) {
     const Field* field = fields.sound_field("spans");
-    if (field == nullptr) return {};
+    const Field* nodes = fields.sound_field("nodes");
+    if (field == nullptr || nodes == nullptr) return {};
     const std::optional<std::vector<Measure>> spans = read_list(fields.context(), fields.path(), *field);
     if (!spans) {
         fields.set_unsound();
         return {};
     }
+    const auto node_count = static_cast<std::size_t>(nodes->node().size());
     if (node_count >= 2 && spans->size() + 1 != node_count) {
         fields.error(*field, fmt::format("has {} spans between {} nodes: give one span fewer than nodes", spans->size(),
                                          node_count));
@@ -91,7 +92,7 @@ std::vector<double> read_starts(Fields& fields, std::size_t node_count) {
 }
 
 void check_run_keys(Fields& fields) {
-    if (fields.find("spans") != nullptr) return;
+    if (fields.find("spans") != nullptr || fields.is_misspelled("spans")) return;
     for (const std::string_view key : {"start", "direction"}) {
         if (const Field* field = fields.find(key)) {
             fields.error(*field, fmt::format("has {} but no spans: add spans, or take {} out where all its nodes exist",
@@ -108,15 +109,11 @@ BeamReader::BeamReader(Draft& draft, const Fields& top)
         draft_.beams.add(entry.name(), static_cast<int>(draft_.beams.items().size()));
         if (!entry.field.sound) draft_.mark_unsound(entry.field.position());
         if (!entry.field.is_table()) continue;
-        runs_.push_back(
-            {Fields(draft_.context, key_group("beam"), entry.path, entry.field.node(), entry.field.position()),
-             entry,
-             {},
-             {},
-             {}});
+        const Fields fields(draft_.context, key_group("beam"), entry.path, entry.field.node(), entry.field.position());
+        runs_.push_back({fields, entry, {}, {}, {}});
         Run& run = runs_.back();
         read_node_names(run.fields, run.names);
-        run.starts = read_starts(run.fields, run.names.size());
+        run.starts = read_starts(run.fields);
         check_run_keys(run.fields);
     }
 }
@@ -185,7 +182,8 @@ void BeamReader::check_place(Run& run, const Node& wanted, const Node& existing)
 
 /// A node that no table and no spans create. It gets into the model all the same, so that others can refer to it.
 void BeamReader::create_unknown_node(Run& run, const TomlNode& name) {
-    if (run.fields.find("spans") == nullptr) {
+    const bool asked_for_spans = run.fields.find("spans") != nullptr || run.fields.is_misspelled("spans");
+    if (!asked_for_spans && draft_.nodes.is_complete()) {
         run.fields.set_unsound();
         draft_.context.error(
             name.position(),

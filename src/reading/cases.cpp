@@ -1,9 +1,6 @@
 // Load cases and combinations.
 
-#include <fmt/format.h>
-
 #include "reading/draft.hpp"
-#include "units/spelling.hpp"
 
 namespace groundsill::reading {
 namespace {
@@ -64,9 +61,7 @@ void read_factors(Draft& draft, Fields& fields, Combination& combination) {
     for (const NamedEntry& entry : named_entries(draft.context, path, table)) {
         const int load_case = draft.cases.find(entry.name());
         if (load_case < 0) {
-            draft.context.error(entry.field.position(),
-                                fmt::format("{}: there is no case {}{}", path.text(), quoted(entry.name()),
-                                            draft.context.nearest_name(draft.cases, entry.name())));
+            draft.context.unknown_name(entry.field.position(), path.text(), "case", entry.name(), draft.cases);
         } else {
             combination.terms.push_back({load_case, entry.field.measure.value});
         }

@@ -2,6 +2,8 @@
 
 #include <utility>
 
+#include <fmt/format.h>
+
 #include "units/spelling.hpp"
 
 namespace groundsill::reading {
@@ -32,6 +34,12 @@ std::string Context::nearest_name(const NameIndex& names, std::string_view wante
     NearestWord nearest(wanted);
     for (const NameIndex::Item& item : names.items()) nearest.consider(item.name);
     return "; the nearest name is " + quoted(nearest.word());
+}
+
+void Context::unknown_name(Position position, std::string_view where, std::string_view kind, std::string_view wanted,
+                           const NameIndex& names) {
+    if (!names.is_complete()) return;
+    error(position, fmt::format("{}: there is no {} {}{}", where, kind, quoted(wanted), nearest_name(names, wanted)));
 }
 
 } // namespace groundsill::reading

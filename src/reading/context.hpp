@@ -40,6 +40,11 @@ class Context {
     /// no name at all, and when so many unknown names have been looked up that the search would take seconds.
     std::string nearest_name(const NameIndex& names, std::string_view wanted);
 
+    /// Reports that a name is not known, unless names are missing anyway.
+    /// \param where the key that names it; \param kind "node", "member", ...
+    void unknown_name(Position position, std::string_view where, std::string_view kind, std::string_view wanted,
+                      const NameIndex& names);
+
   private:
     std::size_t comparisons_left_ = 5'000'000;
 };

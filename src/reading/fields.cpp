@@ -76,6 +76,7 @@ void Fields::unknown_key(const Group& group, const Entry& entry, unsigned loads)
     }
     NearestWord nearest(entry.key);
     for (const GroupKey& known : group.keys) nearest.consider(known.name);
+    if (nearest.is_near()) misspelled_.push_back(nearest.word());
     context_.error(entry.position, fmt::format("unknown key {} {}; {} {}", quoted(entry.key), path_.place(),
                                                nearest.is_near() ? "did you mean" : "the nearest known key is",
                                                quoted(nearest.word())) +
@@ -96,8 +97,12 @@ const Field* Fields::sound_field(std::string_view key) const {
 
 const Field* Fields::required(std::string_view key, std::string_view advice) {
     const Field* field = find(key);
-    if (field == nullptr) error(fmt::format("lacks {}{}", quoted(key), advice));
+    if (field == nullptr && !is_misspelled(key)) error(fmt::format("lacks {}{}", quoted(key), advice));
     return field != nullptr && field->sound ? field : nullptr;
+}
+
+bool Fields::is_misspelled(std::string_view key) const {
+    return std::ranges::find(misspelled_, key) != misspelled_.end();
 }
 
 double Fields::required_number(std::string_view key, std::string_view advice) {
@@ -160,9 +165,8 @@ int resolve(Context& context, const Path& path, const Field& field, const TomlNo
     const int found = names.find(node.text());
     if (found < 0) {
         const bool element = field.node().kind() == TomlKind::array;
-        context.error(element ? node.position() : field.position(),
-                      fmt::format("{}: there is no {} {}{}", path.text(field.entry.key), field.key->words,
-                                  quoted(node.text()), context.nearest_name(names, node.text())));
+        context.unknown_name(element ? node.position() : field.position(), path.text(field.entry.key), field.key->words,
+                             node.text(), names);
     }
     return found;
 }

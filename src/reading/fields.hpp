@@ -6,6 +6,7 @@
 #include <optional>
 #include <span>
 #include <string_view>
+#include <vector>
 
 #include "reading/values.hpp"
 
@@ -17,6 +18,7 @@ namespace groundsill::reading {
 class Fields {
   public:
     static constexpr double stand_in = 1;
+    static constexpr std::size_t most = 32; ///< more than any group has keys
 
     /// \param position where to report what the table lacks
     /// \param loads for entries of `loads`: the kinds whose keys are allowed
@@ -43,6 +45,9 @@ class Fields {
     /// A field that must be there; reports it when it is missing. nullptr then, and when it is not sound.
     const Field* required(std::string_view key, std::string_view advice = {});
 
+    /// True when an unknown key was probably meant to be this one: it is not missing then.
+    bool is_misspelled(std::string_view key) const;
+
     /// Reports it when more than one of the keys is there.
     void at_most_one(std::initializer_list<std::string_view> keys);
 
@@ -59,8 +64,6 @@ class Fields {
     const Path& path() const { return path_; }
 
   private:
-    static constexpr std::size_t most = 32; // more than the keys of any group: a test walks through all of them
-
     void unknown_key(const Group& group, const Entry& entry, unsigned loads);
 
     Context& context_;
@@ -68,6 +71,7 @@ class Fields {
     Position position_;
     std::array<Field, most> fields_;
     std::size_t count_ = 0;
+    std::vector<std::string_view> misspelled_; ///< known keys that unknown ones were probably meant to be
     bool sound_ = true;
 };
 

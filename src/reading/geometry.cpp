@@ -127,7 +127,7 @@ template <class List> void sort_by_place(List& list) {
 }
 
 template <class List> void index_names(NameIndex& names, const List& list) {
-    names = {};
+    names.clear();
     names.reserve(list.size());
     for (std::size_t i = 0; i < list.size(); ++i) names.add(list[i].name, static_cast<int>(i));
 }

@@ -33,6 +33,12 @@ int NameIndex::find(std::string_view name) const {
     return items_[last_].index;
 }
 
+void NameIndex::clear() {
+    items_.clear();
+    slots_.clear();
+    last_ = 0;
+}
+
 void NameIndex::build() const {
     slots_.assign(std::bit_ceil(4 * items_.size()), {});
     for (std::size_t i = 0; i < items_.size(); ++i) enter(i);

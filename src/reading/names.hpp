@@ -22,6 +22,12 @@ class NameIndex {
     /// The index of a name, -1 when it is not known.
     int find(std::string_view name) const;
 
+    void clear(); ///< Forgets all names.
+
+    /// Says that names may be missing, because where they come from could not be read.
+    void set_incomplete() { complete_ = false; }
+    bool is_complete() const { return complete_; }
+
     bool contains(std::string_view name) const { return find(name) >= 0; }
 
     struct Item {
@@ -43,6 +49,7 @@ class NameIndex {
     void build() const;
 
     std::vector<Item> items_;
+    bool complete_ = true;
     mutable std::vector<Slot> slots_; // open addressing; none, or a power of two of them
     mutable std::size_t last_ = 0;    // the item found last
 };

@@ -20,25 +20,44 @@ bool has_errors(const Diagnostics& diagnostics) {
 namespace reading {
 namespace {
 
-/// Reports which of the tables that every model needs are missing or empty. \return whether none is
-bool check_completeness(Draft& draft, const Fields& top) {
-    const Model& model = draft.model;
+/// Marks the names of tables that could not be read, so that references to them are not reported one by one.
+void mark_incomplete_names(Draft& draft, const Fields& top) {
+    const std::pair<std::string_view, std::vector<NameIndex*>> sources[] = {
+        {"materials", {&draft.materials}},
+        {"sections", {&draft.sections}},
+        {"nodes", {&draft.nodes}},
+        {"members", {&draft.members}},
+        {"beams", {&draft.beams, &draft.nodes, &draft.members}},
+        {"supports", {&draft.supports}},
+        {"cases", {&draft.cases}},
+    };
+    for (const auto& [key, lists] : sources) {
+        const bool unreadable = top.find(key) != nullptr && top.sound_field(key) == nullptr;
+        if (!unreadable && !top.is_misspelled(key)) continue;
+        for (NameIndex* names : lists) names->set_incomplete();
+    }
+}
+
+/// Reports which of the parts that every model needs are missing.
+void check_completeness(Draft& draft) {
     std::string missing;
-    const auto need = [&](bool empty, std::initializer_list<std::string_view> tables, std::string_view words) {
-        const auto has_error = [&](std::string_view key) { return top.find(key) != nullptr && !top.sound_field(key); };
-        if (!empty || std::ranges::any_of(tables, has_error)) return;
+    const auto need = [&](const NameIndex& names, std::string_view words) {
+        if (!names.items().empty() || !names.is_complete()) return;
         if (!missing.empty()) missing += ", ";
         missing += words;
     };
-    need(model.nodes.empty(), {"nodes", "beams"}, "nodes ([nodes] or [beams])");
-    need(model.members.empty(), {"members", "beams"}, "members ([members] or [beams])");
-    need(model.supports.empty(), {"supports"}, "supports ([supports])");
-    need(model.cases.empty(), {"cases"}, "load cases ([cases.NAME])");
+    // A beam that creates nothing has been reported.
+    if (draft.beams.items().empty()) {
+        need(draft.nodes, "nodes ([nodes] or [beams])");
+        need(draft.members, "members ([members] or [beams])");
+    }
+    need(draft.supports, "supports ([supports])");
+    need(draft.cases, "load cases ([cases.NAME])");
     if (!missing.empty()) draft.context.error({1, 1}, "the model is not complete: it has no " + missing);
-    return missing.empty();
 }
 
 void read_tables(Draft& draft, const Fields& top) {
+    mark_incomplete_names(draft, top);
     read_head(draft, top);
     read_units(draft, top);
     read_materials(draft, top);
@@ -61,7 +80,7 @@ Draft read_text(std::string_view text) {
     const Path path;
     const Fields top(draft.context, key_group("model"), path, document.root(), {1, 1});
     read_tables(draft, top);
-    check_completeness(draft, top);
+    check_completeness(draft);
     return draft;
 }
 
@@ -71,8 +90,7 @@ Draft read_text(std::string_view text) {
 ReadResult read_model(std::string_view text) {
     constexpr std::string_view byte_order_mark = "\xEF\xBB\xBF";
     if (text.starts_with(byte_order_mark)) text.remove_prefix(byte_order_mark.size());
-    if (auto foreign = reading::find_foreign_bytes(text)) return {std::nullopt, {std::move(*foreign)}};
-    if (auto deep = reading::find_deep_nesting(text)) return {std::nullopt, {std::move(*deep)}};
+    if (auto harm = reading::find_harm(text)) return {std::nullopt, {std::move(*harm)}};
 
     reading::Draft draft = reading::read_text(text);
     ReadResult result{std::nullopt, std::move(draft.context.diagnostics)};

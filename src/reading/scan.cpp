@@ -1,6 +1,7 @@
 #include "reading/scan.hpp"
 
 #include <string>
+#include <utility>
 #include <vector>
 
 namespace groundsill::reading {
@@ -84,9 +85,12 @@ class DepthCounter {
     int key_dots_ = 0; // in the key whose value is being read
 };
 
-} // namespace
+Diagnostic error_at(std::string_view text, std::size_t offset, std::string message) {
+    return {Diagnostic::Severity::error, position_of(text, offset), std::move(message)};
+}
 
-std::optional<Diagnostic> find_deep_nesting(std::string_view text) {
+/// Looks at what stands outside of strings and comments.
+std::optional<Diagnostic> find_harm_in_structure(std::string_view text) {
     DepthCounter counter;
     std::size_t i = 0;
     while (i < text.size()) {
@@ -110,26 +114,33 @@ std::optional<Diagnostic> find_deep_nesting(std::string_view text) {
             counter.read(text[i]);
             break;
         default:
-            break;
+            if (static_cast<unsigned char>(text[i]) < 0x80) break;
+            return error_at(
+                text, i,
+                "this character may stand only between quotation marks (\" or ') and in comments: names, numbers "
+                "and spaces outside of them are plain ASCII");
         }
         if (counter.depth() > deepest) {
-            return Diagnostic{Diagnostic::Severity::error, position_of(text, i),
-                              "tables and arrays are nested more than " + std::to_string(deepest) +
-                                  " deep here: a model needs five or six levels"};
+            return error_at(text, i,
+                            "tables and arrays are nested more than " + std::to_string(deepest) +
+                                " deep here: a model needs five or six levels");
         }
         ++i;
     }
     return {};
 }
 
-std::optional<Diagnostic> find_foreign_bytes(std::string_view text) {
+} // namespace
+
+std::optional<Diagnostic> find_harm(std::string_view text) {
     if (text.starts_with("\xFF\xFE") || text.starts_with("\xFE\xFF")) {
-        return Diagnostic{Diagnostic::Severity::error, {1, 1}, "the file is in UTF-16: save it as UTF-8"};
+        return error_at(text, 0, "the file is in UTF-16: save it as UTF-8");
     }
     const std::size_t nul = text.find('\0');
-    if (nul == std::string_view::npos) return {};
-    return Diagnostic{Diagnostic::Severity::error, position_of(text, nul),
-                      "there is a NUL byte here: a model is plain text in UTF-8"};
+    if (nul != std::string_view::npos) {
+        return error_at(text, nul, "there is a NUL byte here: a model is plain text in UTF-8");
+    }
+    return find_harm_in_structure(text);
 }
 
 } // namespace groundsill::reading

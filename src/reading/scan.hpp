@@ -8,12 +8,11 @@
 
 namespace groundsill::reading {
 
-/// Finds the first place where tables and arrays are nested more than 200 deep, by brackets or by the parts of dotted
-/// keys. No model needs a tenth of that, and the TOML library works through nested values by recursion: tens of
-/// thousands of them would overflow the stack. Brackets and dots in strings and comments do not count.
-std::optional<Diagnostic> find_deep_nesting(std::string_view text);
-
-/// Finds the first byte that no TOML text in UTF-8 may hold: NUL, or the marks of UTF-16.
-std::optional<Diagnostic> find_foreign_bytes(std::string_view text);
+/// Finds the first thing in a text that must not reach the TOML library, or on which it says too little:
+/// - UTF-16 and NUL bytes;
+/// - tables and arrays nested more than 200 deep, by brackets or by the parts of dotted keys. No model needs a tenth of
+///   that, and the library works through nested values by recursion: tens of thousands would overflow the stack;
+/// - characters outside ASCII, except in strings and comments: errors in TOML 1.0, of which the library accepts some.
+std::optional<Diagnostic> find_harm(std::string_view text);
 
 } // namespace groundsill::reading

@@ -1,9 +1,6 @@
 // Supports.
 
-#include <fmt/format.h>
-
 #include "reading/draft.hpp"
-#include "units/spelling.hpp"
 
 namespace groundsill::reading {
 namespace {
@@ -38,8 +35,7 @@ void read_supports(Draft& draft, const Fields& top) {
         support.position = entry.field.position();
         support.node = draft.nodes.find(entry.name());
         if (support.node < 0 && entry.field.sound) {
-            draft.context.error(support.position, fmt::format("supports: there is no node {}{}", quoted(entry.name()),
-                                                              draft.context.nearest_name(draft.nodes, entry.name())));
+            draft.context.unknown_name(support.position, "supports", "node", entry.name(), draft.nodes);
         }
         if (support.node < 0 || !entry.field.sound) draft.mark_unsound(support.position);
         if (entry.field.is_text()) read_word(support, entry.field.node().text());

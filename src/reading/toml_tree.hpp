@@ -69,7 +69,7 @@ class Document {
     Document& operator=(Document&&) noexcept;
 
     /// Parses the text. The first error of syntax goes into `error`, and the document stays empty.
-    /// \pre the text is not nested too deeply (find_deep_nesting)
+    /// \pre nothing in the text can harm the library (find_harm)
     /// \return whether it could be parsed
     bool parse(std::string_view text, Diagnostic& error);
 

@@ -92,6 +92,14 @@ void clear_inactive(const Structure& structure, int row_node, int column_node, B
             if (!structure.active[3 * row_node + row] || !structure.active[3 * column_node + column]) block[3 * row + column] = 0;
 }
 
+/// The block of a matrix between two nodes, given for (i, j); added transposed where j stands before i.
+void add_between(int i, int j, const Block& block, BlockMatrix& matrix) {
+    const auto first = matrix.rows.begin() + matrix.column_start[std::max(i, j)];
+    const auto last = matrix.rows.begin() + matrix.column_start[std::max(i, j) + 1];
+    const auto found = std::lower_bound(first, last, std::min(i, j));
+    add(i < j ? block : transposed(block), matrix.blocks[found - matrix.rows.begin()]);
+}
+
 void add_segment(const Structure& structure, const Segment& segment, BlockMatrix& matrix) {
     const Block at_i = chord_rows(structure, segment, false);
     const Block at_j = chord_rows(structure, segment, true);
@@ -100,11 +108,29 @@ void add_segment(const Structure& structure, const Segment& segment, BlockMatrix
     add(product(at_j, segment.stiffness, at_j), matrix.diagonal[j]);
     Block between = product(at_i, segment.stiffness, at_j);
     clear_inactive(structure, segment.i, segment.j, between);
-    if (i > j) between = transposed(between);
-    const auto first = matrix.rows.begin() + matrix.column_start[std::max(i, j)];
-    const auto last = matrix.rows.begin() + matrix.column_start[std::max(i, j) + 1];
-    const auto found = std::lower_bound(first, last, std::min(i, j));
-    add(between, matrix.blocks[found - matrix.rows.begin()]);
+    add_between(i, j, between, matrix);
+}
+
+/// Turns the axes of a node into those of a segment: rows along, across, rotation.
+Block turn(const Structure& structure, const Segment& segment, int node) {
+    Real c = segment.frame.cosine, s = segment.frame.sine;
+    if (const TurnedAxes* axes = structure.turned_axes(node)) {
+        const Real turned = c * axes->cosine + s * axes->sine;
+        s = s * axes->cosine - c * axes->sine;
+        c = turned;
+    }
+    const double cosine = static_cast<double>(c), sine = static_cast<double>(s);
+    return {cosine, sine, 0, -sine, cosine, 0, 0, 0, 1};
+}
+
+/// Aᵀ V B for the 3 x 3 part of V that starts at (row, column).
+Block turned_part(const std::array<double, 36>& V, int row, int column, const Block& A, const Block& B) {
+    Block result{};
+    for (int i = 0; i < 3; ++i)
+        for (int j = 0; j < 3; ++j)
+            for (int k = 0; k < 3; ++k)
+                for (int l = 0; l < 3; ++l) result[3 * i + j] += A[3 * k + i] * V[6 * (row + k) + column + l] * B[3 * l + j];
+    return result;
 }
 
 void finish_diagonal(const Structure& structure, int node, Block& block) {
@@ -131,6 +157,58 @@ BlockMatrix assemble(const Structure& structure) {
     for (int node = 0; node < structure.node_count; ++node)
         finish_diagonal(structure, node, matrix.diagonal[matrix.place_of[node]]);
     return matrix;
+}
+
+void add_end_matrix(const Structure& structure, const Segment& segment, const std::array<double, 36>& values, BlockMatrix& matrix) {
+    const Block at_i = turn(structure, segment, segment.i), at_j = turn(structure, segment, segment.j);
+    Block ii = turned_part(values, 0, 0, at_i, at_i), ij = turned_part(values, 0, 3, at_i, at_j),
+          jj = turned_part(values, 3, 3, at_j, at_j);
+    clear_inactive(structure, segment.i, segment.i, ii);
+    clear_inactive(structure, segment.i, segment.j, ij);
+    clear_inactive(structure, segment.j, segment.j, jj);
+    const int i = matrix.place_of[segment.i], j = matrix.place_of[segment.j];
+    add(ii, matrix.diagonal[i]);
+    add(jj, matrix.diagonal[j]);
+    add_between(i, j, ij, matrix);
+}
+
+void add_to_node(const Structure& structure, int node, double value, BlockMatrix& matrix) {
+    for (int c = 0; c < 2; ++c)
+        if (structure.active[3 * node + c]) matrix.diagonal[matrix.place_of[node]][4 * c] += value;
+}
+
+BlockMatrix zeros_like(const BlockMatrix& matrix) {
+    BlockMatrix zeros = matrix;
+    std::fill(zeros.diagonal.begin(), zeros.diagonal.end(), Block{});
+    std::fill(zeros.blocks.begin(), zeros.blocks.end(), Block{});
+    return zeros;
+}
+
+BlockMatrix shifted(const BlockMatrix& A, double s, const BlockMatrix& B) {
+    BlockMatrix result = A;
+    for (std::size_t k = 0; k < A.diagonal.size(); ++k)
+        for (int e = 0; e < 9; ++e) result.diagonal[k][e] -= s * B.diagonal[k][e];
+    for (std::size_t k = 0; k < A.blocks.size(); ++k)
+        for (int e = 0; e < 9; ++e) result.blocks[k][e] -= s * B.blocks[k][e];
+    return result;
+}
+
+void multiply(const BlockMatrix& matrix, const std::vector<double>& x, std::vector<double>& y) {
+    std::fill(y.begin(), y.end(), 0.0);
+    for (int column = 0; column < matrix.size(); ++column) {
+        const std::size_t c = 3 * std::size_t(matrix.node_at[column]);
+        const Block& diagonal = matrix.diagonal[column];
+        for (int i = 0; i < 3; ++i)
+            y[c + i] += diagonal[3 * i] * x[c] + diagonal[3 * i + 1] * x[c + 1] + diagonal[3 * i + 2] * x[c + 2];
+        for (int k = matrix.column_start[column]; k < matrix.column_start[column + 1]; ++k) {
+            const Block& B = matrix.blocks[k];
+            const std::size_t r = 3 * std::size_t(matrix.node_at[matrix.rows[k]]);
+            for (int i = 0; i < 3; ++i) {
+                y[r + i] += B[3 * i] * x[c] + B[3 * i + 1] * x[c + 1] + B[3 * i + 2] * x[c + 2];
+                y[c + i] += B[i] * x[r] + B[3 + i] * x[r + 1] + B[6 + i] * x[r + 2];
+            }
+        }
+    }
 }
 
 } // namespace groundsill

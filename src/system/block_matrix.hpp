@@ -30,6 +30,21 @@ struct BlockMatrix {
 /// Duff 1996).
 BlockMatrix assemble(const Structure& structure);
 
+/// Adds a symmetric 6 x 6 matrix over the end movements of a segment, in its axes; entries of inactive directions are left out.
+void add_end_matrix(const Structure& structure, const Segment& segment, const std::array<double, 36>& values, BlockMatrix& matrix);
+
+/// Adds the same to x and y of a node (a point mass), where they are active.
+void add_to_node(const Structure& structure, int node, double value, BlockMatrix& matrix);
+
+/// The pattern of a matrix with zeros in it.
+BlockMatrix zeros_like(const BlockMatrix& matrix);
+
+/// A - s B of two matrices with one pattern.
+BlockMatrix shifted(const BlockMatrix& A, double s, const BlockMatrix& B);
+
+/// y = A x; both by direction of the structure.
+void multiply(const BlockMatrix& matrix, const std::vector<double>& x, std::vector<double>& y);
+
 /// The widest band, in nodes, for which a band factor is used.
 inline constexpr int widest_band = 12;
 

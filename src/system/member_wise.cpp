@@ -5,7 +5,8 @@
 
 namespace groundsill {
 
-using elements::Basic;
+using elements::BasicForces;
+using elements::Deformation;
 using elements::FixedEnd;
 using elements::State;
 
@@ -28,23 +29,23 @@ Vector to_node(const TurnedAxes* axes, Real x, Real y) {
 }
 
 /// Chord deformations from the differences between the ends and the rotations there.
-Basic deformation(const Segment& segment, Real dx, Real dy, Real rotation_i, Real rotation_j) {
+Deformation deformation(const Segment& segment, Real dx, Real dy, Real rotation_i, Real rotation_j) {
     const elements::Frame& frame = segment.frame;
     const Real chord = (-frame.sine * dx + frame.cosine * dy) / frame.length;
     return {frame.cosine * dx + frame.sine * dy, chord - rotation_i, rotation_j - chord};
 }
 
-Basic deformation(const Structure& structure, const Segment& segment, const std::vector<Real>& x) {
+Deformation deformation(const Structure& structure, const Segment& segment, const std::vector<Real>& x) {
     const int i = 3 * segment.i, j = 3 * segment.j;
     const Vector from = to_global(structure.turned_axes(segment.i), x[i], x[i + 1]);
     const Vector to = to_global(structure.turned_axes(segment.j), x[j], x[j + 1]);
     return deformation(segment, to.x - from.x, to.y - from.y, x[i + 2], x[j + 2]);
 }
 
-Basic deformation(const Structure& structure, const Segment& segment, const Movements& u) {
+Deformation deformation(const Structure& structure, const Segment& segment, const Movements& u) {
     // differences of the high parts first: they are large and nearly equal
-    const Basic high = deformation(structure, segment, u.high);
-    const Basic low = deformation(structure, segment, u.low);
+    const Deformation high = deformation(structure, segment, u.high);
+    const Deformation low = deformation(structure, segment, u.low);
     return {high.axial + low.axial, high.first + low.first, high.second + low.second};
 }
 
@@ -84,21 +85,19 @@ void Movements::add(int direction, Real value) {
     a = sum;
 }
 
-Basic basic_forces(const Structure& structure, const Segment& segment, const Movements& u, const FixedEnd* fixed) {
-    const Basic q = segment.stiffness * deformation(structure, segment, u);
-    if (!fixed) return q;
-    return {clean_sum(q.axial, fixed->q.axial), clean_sum(q.first, fixed->q.first), clean_sum(q.second, fixed->q.second)};
+BasicForces basic_forces(const Structure& structure, const Segment& segment, const Movements& u) {
+    return segment.stiffness * deformation(structure, segment, u);
 }
 
-EndForces end_forces(const Segment& segment, const Basic& q, const FixedEnd* fixed) {
-    const Real shear = (q.second - q.first) / segment.frame.length;
-    EndForces f{-q.axial, shear, -q.first, q.axial, -shear, q.second};
-    if (fixed) {
-        f.across_i = clean_sum(shear, fixed->V0);
-        f.along_j = clean_sum(q.axial, -fixed->P);
-        f.across_j = clean_sum(-shear, -fixed->VL);
-    }
-    return f;
+EndForces end_forces(const BasicForces& q, const FixedEnd* fixed) {
+    if (!fixed) return {-q.N, q.V, -q.M1, q.N, -q.V, q.M2};
+    const Real N = clean_sum(q.N, fixed->q.N);
+    return {-N,
+            clean_sum(q.V, fixed->V_start),
+            -clean_sum(q.M1, fixed->q.M1),
+            clean_sum(N, -fixed->P),
+            -clean_sum(q.V, fixed->V_end),
+            clean_sum(q.M2, fixed->q.M2)};
 }
 
 State end_state(const Structure& structure, const Segment& segment, bool at_end, const Movements& u) {
@@ -121,7 +120,7 @@ std::vector<Real> residual(const Structure& structure, const LoadVector& loads, 
     for (std::size_t k = 0; k < structure.segments.size(); ++k) {
         const Segment& segment = structure.segments[k];
         const FixedEnd* fixed = loads.fixed.empty() ? nullptr : &loads.fixed[k];
-        const EndForces f = end_forces(segment, basic_forces(structure, segment, u, fixed), fixed);
+        const EndForces f = end_forces(basic_forces(structure, segment, u), fixed);
         scale = std::max(scale, largest(f, structure.size));
         scatter(structure, segment, f, -1, r);
     }
@@ -131,26 +130,33 @@ std::vector<Real> residual(const Structure& structure, const LoadVector& loads, 
 void apply_stiffness(const Structure& structure, const std::vector<Real>& x, std::vector<Real>& y) {
     for (int d = 0; d < structure.directions(); ++d) y[d] = structure.spring[d] == 0 ? Real(0) : structure.spring[d] * x[d];
     for (const Segment& segment : structure.segments) {
-        const Basic q = segment.stiffness * deformation(structure, segment, x);
-        scatter(structure, segment, end_forces(segment, q, nullptr), 1, y);
+        const BasicForces q = segment.stiffness * deformation(structure, segment, x);
+        scatter(structure, segment, end_forces(q, nullptr), 1, y);
     }
     for (int d = 0; d < structure.directions(); ++d)
         if (!structure.active[d]) y[d] = 0;
 }
 
+namespace {
+
+/// qᵀ F q instead of qᵀ e: where a release lets e pass without force, round-off comes in squared.
+Real work_of(const Segment& segment, const BasicForces& a, const BasicForces& b) {
+    const elements::BendingFlexibility f = elements::end_moment_flexibility(segment.frame);
+    const Real axial = segment.stiffness.axial == 0 ? Real(0) : a.N * b.N / segment.stiffness.axial;
+    return axial + f.f11 * a.M1 * b.M1 + f.f12 * (a.M1 * b.M2 + a.M2 * b.M1) + f.f22 * a.M2 * b.M2;
+}
+
+} // namespace
+
+Real strain_energy(const Segment& segment, const BasicForces& q) { return work_of(segment, q, q); }
+
 Real strain_energy(const Structure& structure, const std::vector<Real>& x, const std::vector<Real>& y) {
     Real energy = 0;
     for (int d = 0; d < structure.directions(); ++d)
         if (structure.spring[d] != 0) energy += structure.spring[d] * x[d] * y[d];
-    for (const Segment& segment : structure.segments) {
-        const Basic qx = segment.stiffness * deformation(structure, segment, x);
-        const Basic qy = segment.stiffness * deformation(structure, segment, y);
-        if (segment.stiffness.axial != 0) energy += qx.axial * qy.axial / segment.stiffness.axial;
-        // qᵀ F q instead of qᵀ e: where a release lets e pass without force, round-off comes in squared
-        const elements::BendingFlexibility f = elements::end_moment_flexibility(segment.frame);
-        energy += f.f11 * qx.first * qy.first + f.f12 * (qx.first * qy.second + qx.second * qy.first) +
-                  f.f22 * qx.second * qy.second;
-    }
+    for (const Segment& segment : structure.segments)
+        energy += work_of(segment, segment.stiffness * deformation(structure, segment, x),
+                          segment.stiffness * deformation(structure, segment, y));
     return energy;
 }
 

@@ -30,12 +30,11 @@ struct EndForces {
     Real along_j = 0, across_j = 0, moment_j = 0;
 };
 
-/// Forces N at the start, M1 and M2 of a segment for given movements and loads. A sum at round-off of its parts is 0.
-elements::Basic basic_forces(const Structure& structure, const Segment& segment, const Movements& u,
-                             const elements::FixedEnd* fixed);
+/// Forces N, M1, M2 and V of a segment from the movements of its nodes, without those of its loads.
+elements::BasicForces basic_forces(const Structure& structure, const Segment& segment, const Movements& u);
 
-/// The end forces that belong to basic forces and loads.
-EndForces end_forces(const Segment& segment, const elements::Basic& q, const elements::FixedEnd* fixed);
+/// The end forces that belong to basic forces and, where it is loaded, fixed-end forces. A sum at round-off of its parts is 0.
+EndForces end_forces(const elements::BasicForces& q, const elements::FixedEnd* fixed);
 
 /// Movements of the node at one end of a segment, in the segment's axes.
 elements::State end_state(const Structure& structure, const Segment& segment, bool at_end, const Movements& u);
@@ -46,6 +45,9 @@ std::vector<Real> residual(const Structure& structure, const LoadVector& loads, 
 
 /// y = K x on the active directions (0 on the others), without loads.
 void apply_stiffness(const Structure& structure, const std::vector<Real>& x, std::vector<Real>& y);
+
+/// Twice the strain energy of a segment under the basic forces q, its elastic releases included.
+Real strain_energy(const Segment& segment, const elements::BasicForces& q);
 
 /// xᵀ K y of two shapes (x = y: twice the strain energy), summed from their forces, so that a shape without forces comes out at
 /// the square of round-off.

@@ -20,6 +20,7 @@ struct SoftShapes {
 struct Refined {
     Movements u;
     double residual = 0; ///< largest |f - K u| over the largest nodal load or end force, moments divided by the size
+    Real held = 0;       ///< largest force that would act if no free node moved: beside it, less than 1e-19 is round-off
 };
 
 /// Solves K u = f. Conjugate gradients on the member-wise residual in long double, preconditioned by the factor and started
@@ -29,6 +30,8 @@ Refined refine(const Structure& structure, const Factor& factor, const SoftShape
                const Movements& given);
 
 /// Approximate x = K⁻¹ r of the factor and the soft shapes together, zero on inactive directions.
+std::vector<double> precondition(const Structure& structure, const Factor& factor, const SoftShapes& soft,
+                                 std::vector<double> r);
 std::vector<Real> precondition(const Structure& structure, const Factor& factor, const SoftShapes& soft,
                                const std::vector<Real>& r);
 

@@ -48,7 +48,7 @@ std::string Display::given(Shown kind, double si) const {
 std::string significant(double value) {
     if (value == 0) return "0";
     if (!std::isfinite(value)) return "-";
-    const std::string scientific = fmt::format("{:.3e}", value);
+    std::string scientific = fmt::format("{:.3e}", value);
     const int exponent = std::atoi(scientific.c_str() + scientific.find('e') + 1);
     if (exponent < -3 || exponent > 6) return scientific;
     return fmt::format("{:.{}f}", value, exponent >= 3 ? 0 : 3 - exponent);

@@ -50,8 +50,9 @@ void NearestWord::consider(std::string_view known) {
 }
 
 bool NearestWord::is_near() const {
+    // One letter in three may be wrong, and one in any case.
     const auto letters = static_cast<int>(std::max(wanted_.size(), best_.size()));
-    return !best_.empty() && distance_ <= std::max(2, letters);
+    return !best_.empty() && distance_ <= std::max(2, 2 * letters / 3);
 }
 
 std::string quoted(std::string_view word) {

@@ -149,8 +149,8 @@ void write_extremes(const Analysis& analysis, Rows& rows) {
         for (std::size_t member = 0; member < model.members.size(); ++member) {
             const Diagram diagram = scope.diagram(member);
             scope.begin_row(rows, model.members[member].name);
-            for (const Quantity quantity : {Quantity::N, Quantity::V, Quantity::M, Quantity::across}) {
-                const DiagramRange range = member_range(diagram, quantity, rounding);
+            for (const Curve curve : {Curve::N, Curve::V, Curve::M, Curve::across}) {
+                const DiagramRange range = member_range(diagram, curve, rounding);
                 for (const double value : {range.max.value, range.max.at, range.min.value, range.min.at})
                     rows.cell(value);
             }

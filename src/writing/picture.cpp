@@ -88,7 +88,7 @@ class Scale {
             top_ = std::max(top_, node.y);
         }
         const double across = (right_ - left_) / (most_columns - 1 - 2 * margin_columns);
-        const double upward = (top_ - bottom_) * row_height / (most_rows - 1 - 2 * margin_rows);
+        const double upward = (top_ - bottom_) / (row_height * (most_rows - 1 - 2 * margin_rows));
         width_ = std::max(across, upward);
         if (width_ <= 0) width_ = 1;
     }

@@ -56,8 +56,8 @@ void write_row(JsonWriter& json, const DiagramRange& range) {
     json.close();
 }
 
-constexpr std::array<std::pair<std::string_view, Quantity>, 4> quantities = {
-    {{"N", Quantity::N}, {"V", Quantity::V}, {"M", Quantity::M}, {"across", Quantity::across}}};
+constexpr std::array<std::pair<std::string_view, Curve>, 4> curves = {
+    {{"N", Curve::N}, {"V", Curve::V}, {"M", Curve::M}, {"across", Curve::across}}};
 
 void write_member(JsonWriter& json, const Diagram& diagram, const WriteOptions& options, const RoundOff& rounding) {
     json.open_object();
@@ -68,8 +68,8 @@ void write_member(JsonWriter& json, const Diagram& diagram, const WriteOptions& 
         json.close();
     }
     json.key("extremes").open_object();
-    for (const auto& [name, quantity] : quantities)
-        write_row(json.key(name), member_range(diagram, quantity, rounding));
+    for (const auto& [name, curve] : curves)
+        write_row(json.key(name), member_range(diagram, curve, rounding));
     json.close();
     json.close();
 }

@@ -182,11 +182,9 @@ std::string verification(const Analysis& analysis) {
 }
 
 constexpr std::string_view cautions = "Holds for the model as assumed; confirm ground and structure as built; local "
-                                      "codes govern; a licensed engineer reviews "
-                                      "and signs.\n"
-                                      "Not checked: strength and deflection limits, buckling (lateral-torsional too), "
-                                      "connections, concrete cracking, bearing "
-                                      "pressure.\n";
+                                      "codes govern; a licensed engineer reviews and signs.\n"
+                                      "Not checked: strength, deflections, buckling (lateral-torsional too), "
+                                      "second-order effects, connections, cracking, bearing.\n";
 
 } // namespace
 

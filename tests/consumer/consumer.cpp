@@ -42,7 +42,7 @@ int main() {
         std::fputs(outcome.refusal.message.c_str(), stderr);
         return 3;
     }
-    const auto moment = groundsill::case_diagram(*outcome.analysis, 0, 0).extremes(groundsill::Quantity::M, 1e-6).max;
+    const auto moment = groundsill::case_diagram(*outcome.analysis, 0, 0).extremes(groundsill::Curve::M, 1e-6).max;
     std::printf("Largest moment %.6f kN m at %.6f m\n", moment.value / 1e3, moment.at);
     return std::abs(moment.value - 120e3) < 1e-4 && std::abs(moment.at - 4) < 1e-9 ? 0 : 1;
 }

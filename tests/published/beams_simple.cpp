@@ -75,6 +75,7 @@ TEST_CASE("simply supported beam, two equal point loads") {
     const Row row(Group::simple_spans, "4 simple span, two P at a from each end");
     const Solved s = simple_span({point("AB", P, a), point("AB", P, L - a)});
     row.check("largest M, kN m", P * a, s.most("AB", "M").value);
+    row.check("first place of the largest M, m", a, s.most("AB", "M").at);
     row.check("M at midspan, kN m", P * a, s.M("AB", L / 2));
     row.check("deflection at midspan, m", -P * a * (3 * L * L - 4 * a * a) / (24 * EI), s.across("AB", L / 2));
 }

@@ -427,3 +427,77 @@ TEST_CASE("combinations and coexisting forces") {
     CHECK(r.text("/envelopes/strength/reactions/A/y/least/combination") == "low");
     CHECK(r.text("/envelopes/strength/members/AB/M/most/combination") == "uls");
 }
+
+TEST_CASE("loads by their place along a run") {
+    // A run of two unequal spans; the same load given on the run and member by member, and as a fraction of the length.
+    const double L1 = 4.2, L2 = 6.3, w1 = 5.1, w2 = 17.4, from = 1.7, to = 8.9, P = 37;
+    const auto model = [&](const std::vector<std::string>& loads) {
+        return Solved(header(bar) +
+                      "[beams.run]\nnodes = [\"A\", \"B\", \"C\"]\nspans = [4.2, 6.3]\nsection = \"bar\"\n"
+                      "material = \"m\"\n[supports]\nA = \"pinned\"\nC = \"roller\"\n" +
+                      load_case(loads));
+    };
+    const Row row(Group::conventions, "simple span as a run of two members");
+    // Resultant W of the trapezoid at z from its start: R_C = W (from + z)/(L1 + L2).
+    const double c = to - from, W = (w1 + w2) * c / 2, z = c * (w1 + 2 * w2) / (3 * (w1 + w2));
+    const Solved s = model({fmt::format("{{ beam = \"run\", y = [{}, {}], between = [{}, {}] }}", -w1, -w2, from, to)});
+    row.check("trapezoid over a node: reaction at C, kN", W * (from + z) / (L1 + L2), s.reaction_y("C"));
+    row.check("trapezoid over a node: reaction at A, kN", W - W * (from + z) / (L1 + L2), s.reaction_y("A"));
+    // M at the node = R_A L1 - (w1 d2/2 + slope d3/6), d = L1 - from.
+    const double d = L1 - from, slope = (w2 - w1) / c;
+    row.check("trapezoid over a node: M at B, kN m",
+              s.reaction_y("A") * L1 - w1 * d * d / 2 - slope * std::pow(d, 3) / 6, s.M("run.1", L1));
+    const Solved p =
+        model({fmt::format("{{ beam = \"run\", y = {}, at = 7.35 }}", -P)}); // in the middle of the second span
+    row.check("P at 7.35 m of the run: reaction at C, kN", P * 7.35 / (L1 + L2), p.reaction_y("C"));
+    row.check("P at 7.35 m of the run: M there, kN m", P * 7.35 * (L1 + L2 - 7.35) / (L1 + L2), p.M("run.2", L2 / 2));
+    const Solved half = model({fmt::format("{{ member = \"run.2\", y = {}, at = \"50 %\" }}", -P)});
+    row.check("P at 50 % of the second member: reaction at C, kN", P * 7.35 / (L1 + L2), half.reaction_y("C"));
+}
+
+TEST_CASE("run in a direction of its own") {
+    // A mast of two members, 90 deg: pinned foot, held sideways at 3.5 m, H to the right at its top, 6 m.
+    const double a = 3.5, c = 2.5, H = 17;
+    const Row row(Group::conventions, "mast as a run turned by 90 deg, H at the top");
+    const Solved s(header(bar) +
+                   "[beams.mast]\nnodes = [\"A\", \"B\", \"C\"]\nspans = [3.5, 2.5]\ndirection = \"90 deg\"\n"
+                   "section = \"bar\"\nmaterial = \"m\"\n[supports]\nA = \"pinned\"\n"
+                   "B = { x = \"fixed\" }\n" +
+                   load_case({fmt::format("{{ node = \"C\", x = {} }}", H)}));
+    row.check("reaction at the stay = -H(a+c)/a, kN", -H * (a + c) / a, s.reaction_x("B"));
+    row.check("reaction at the foot = Hc/a, kN", H * c / a, s.reaction_x("A"));
+    row.check("M at the stay = -Hc, kN m", -H * c, s.M("mast.1", a));
+    row.check("top moves by Hc2(a+c)/3EI, m", H * c * c * (a + c) / (3 * EI), s.x("C"));
+}
+
+TEST_CASE("two pinned bars") {
+    // Bars from A and C up to B, load P at B: N = -P/(2 sin), B sinks by P l/(2 EA sin2); no bending.
+    const double x = 3.1, y = 2.3, l = std::hypot(x, y), sine = y / l, P = 90;
+    const std::string ends = "section = \"bar\", material = \"m\", releases = { start = { moment = \"free\" }, end = { "
+                             "moment = \"free\" } } }\n";
+    const Row row(Group::conventions, "two bars, pinned at all ends, P at their apex");
+    const Solved s(header(bar) +
+                   fmt::format("[nodes]\nA = [0, 0]\nB = [{}, {}]\nC = [{}, 0]\n[members]\n", x, y, 2 * x) +
+                   "AB = { from = \"A\", to = \"B\", " + ends + "BC = { from = \"B\", to = \"C\", " + ends +
+                   "[supports]\nA = \"pinned\"\nC = \"pinned\"\n" + load_case({force("B", P)}));
+    row.check("N = -P/2sin, kN", -P / (2 * sine), s.N("AB", 0));
+    row.check("thrust = P x/2y, kN", P * x / (2 * y), s.reaction_x("A"));
+    row.check("apex sinks by Pl/(2EA sin2), m", -P * l / (2 * EA * sine * sine), s.y("B"));
+    row.check_zero("M at midspan, kN m", s.M("AB", l / 2), P * l);
+    CHECK_FALSE(s.json().has("/cases/load/displacements/B/rotation"));
+}
+
+TEST_CASE("loads on supports") {
+    // A load on a held node goes straight into its support; on a spring the node gives by P/k.
+    const double L = 7.3, P = 37, m = 41, k = 2300;
+    const Row row(Group::conventions, "loads at supported nodes");
+    const Solved s = solve({L, 0, fixed, "{ y = 2300 }", {force("A", P), couple("A", m)}});
+    row.check("force on a fixed support: reaction = P, kN", P, s.reaction_y("A"));
+    row.check("couple on a fixed support: reaction moment = -m, kN m", -m, s.reaction_moment("A"));
+    row.check_zero("M of the beam, kN m", s.M("AB", 0), m);
+    const Solved e = solve({L, 0, pinned, "{ y = 2300 }", {force("B", P)}});
+    row.check("force on a spring: reaction = P, kN", P, e.reaction_y("B"));
+    row.check("force on a spring: movement = -P/k, m", -P / k, e.y("B"));
+    row.check_zero("a roller has no reaction along x, kN", e.reaction_x("B"), P);
+    row.check_zero("and no moment, kN m", e.reaction_moment("B"), P * L);
+}

@@ -33,10 +33,11 @@ constexpr std::array<GroupText, 10> groups{{
      "rows that "
      "name a publication were read there."},
     {Group::shear_flexible, "Shear-flexible beams",
-     "J. S. Przemieniecki, *Theory of Matrix Structural Analysis*, 1968, ch. 5; S. P. Timoshenko, *Strength of "
-     "Materials*, part "
-     "I, 3rd ed. 1955, art. 39. From memory, and confirmed by an independent matrix solution. Phi = 12 E I / (kappa G "
-     "A L^2)."},
+     "J. S. Przemieniecki, *Theory of Matrix Structural Analysis*, 1968; R. D. Cook, D. S. Malkus, M. E. Plesha, "
+     "*Concepts and "
+     "Applications of Finite Element Analysis*, 3rd ed. 1989. From memory, and confirmed by an independent matrix "
+     "solution. "
+     "Phi = 12 E I / (kappa G A L^2)."},
     {Group::continuous, "Continuous beams with equal spans",
      "Coefficients solved in exact fractions from the three-moment equation; rounded, they are those of American "
      "Institute of "
@@ -75,7 +76,7 @@ std::string six_digits(double value) { return fmt::format("{:.6g}", value * (1 +
 
 } // namespace
 
-Row::Row(Group group, std::string title, std::string source) : group_(group), title_(std::move(title)) {
+Row::Row(Group group, std::string title, const std::string& source) : group_(group), title_(std::move(title)) {
     if (!source.empty()) title_ += " (" + source + ")";
 }
 

@@ -46,7 +46,7 @@ constexpr Tolerance printed(double last) { return {0, 0.5 * last, "printed digit
 class Row {
   public:
     /// \param source the publication, where the row's differs from the group's; empty otherwise
-    Row(Group group, std::string title, std::string source = {});
+    Row(Group group, std::string title, const std::string& source = {});
 
     /// Asserts that `got` agrees with `expected` and enters both in the register.
     /// \param quantity what is compared, with its unit: "M at midspan, kN m"

@@ -1,5 +1,5 @@
-// The reference solution against closed forms: S. P. Timoshenko and J. M. Gere, Mechanics of Materials, and W. C. Young and
-// R. G. Budynas, Roark's Formulas for Stress and Strain, 7th ed. 2002, ch. 8 (both from memory).
+// The reference solution against closed forms: S. P. Timoshenko and J. M. Gere, Mechanics of Materials, and W. C. Young
+// and R. G. Budynas, Roark's Formulas for Stress and Strain, 7th ed. 2002, ch. 8 (both from memory).
 
 #include "dense_reference.hpp"
 #include "number.hpp"
@@ -88,7 +88,8 @@ TEST_SUITE("quick") {
         const Reference<Quad> solution(frame);
         check_equal(solution.place(0, 0, 0, true).M, -6 * E * I * 0.01 / (L * L));
         check_equal(solution.place(0, 0, L, false).M, 6 * E * I * 0.01 / (L * L));
-        check_equal(solution.place(1, 0, L / 3, true).M, E * I * 1.2e-5 * 20 / depth); // the hot top is compressed: sagging moment
+        check_equal(solution.place(1, 0, L / 3, true).M,
+                    E * I * 1.2e-5 * 20 / depth); // the hot top is compressed: sagging moment
         check_equal(solution.place(1, 0, L / 3, true).N, -E * A * 1.2e-5 * 20);
         check_equal(solution.place(2, 0, L / 3, true).N, -E * A * 0.002 / L);
     }
@@ -117,8 +118,8 @@ TEST_SUITE("quick") {
     }
 
     TEST_CASE("a turned support and an inclined bar") {
-        // bar at 45 degrees from a pin to a roller whose own y is turned by 60 degrees, vertical load: by hand, N from the
-        // equilibrium of the node, N (cos 45, sin 45) + R (-sin 60, cos 60) = (0, -P) reversed
+        // bar at 45 degrees from a pin to a roller whose own y is turned by 60 degrees, vertical load: by hand, N from
+        // the equilibrium of the node, N (cos 45, sin 45) + R (-sin 60, cos 60) = (0, -P) reversed
         const double P = 10e3, c = std::sqrt(0.5), sine = std::sqrt(3.0) / 2;
         Frame frame = beam();
         frame.nodes[1] = {"B", 3, 3};

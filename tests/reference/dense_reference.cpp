@@ -17,9 +17,7 @@ std::size_t index(int i) { return static_cast<std::size_t>(i); }
 /// Order of a state's components.
 enum Component { along, across, rotation, axial, shear, bending };
 
-template <class S> struct Axis {
-    S length, cosine, sine;
-};
+template <class S> struct Axis { S length, cosine, sine; };
 
 template <class S> Axis<S> axis_of(const Frame& frame, const Member& member) {
     const Node& from = frame.nodes[index(member.from)];
@@ -88,14 +86,17 @@ Reference<S>::Course::Course(const Frame& frame, int number) : axis(axis_of<S>(f
     cases = static_cast<int>(frame.cases.size());
     free_strain.assign(index(cases), S(0));
     free_curvature.assign(index(cases), S(0));
-    for (int hinge = 0; hinge < hinges; ++hinge)
-        jumps.push_back({S(member.hinges[index(hinge)]), 0, 0, 0, -1, hinge});
+    for (int hinge = 0; hinge < hinges; ++hinge) jumps.push_back({S(member.hinges[index(hinge)]), 0, 0, 0, -1, hinge});
     for (int load_case = 0; load_case < cases; ++load_case)
         for (const Load& load : frame.cases[index(load_case)].loads) {
-            if (load.kind == Load::Kind::self_weight) take_self_weight(frame, load, load_case, member);
-            else if (load.kind == Load::Kind::node || load.kind == Load::Kind::movement || load.on != number) continue;
-            else if (load.kind == Load::Kind::temperature) take_temperature(frame, load, load_case, member);
-            else take(load, load_case);
+            if (load.kind == Load::Kind::self_weight)
+                take_self_weight(frame, load, load_case, member);
+            else if (load.kind == Load::Kind::node || load.kind == Load::Kind::movement || load.on != number)
+                continue;
+            else if (load.kind == Load::Kind::temperature)
+                take_temperature(frame, load, load_case, member);
+            else
+                take(load, load_case);
         }
 }
 
@@ -212,8 +213,7 @@ template <class S> std::vector<S> Reference<S>::Course::breaks(S at) const {
         add(load.a);
         add(load.b);
     }
-    for (const Jump& jump : jumps)
-        add(jump.at);
+    for (const Jump& jump : jumps) add(jump.at);
     std::sort(places.begin(), places.end());
     places.erase(std::unique(places.begin(), places.end()), places.end());
     return places;
@@ -245,8 +245,7 @@ template <class S> S Reference<S>::Course::snapped(double at) const {
         consider(load.a);
         consider(load.b);
     }
-    for (const Jump& each : jumps)
-        consider(each.at);
+    for (const Jump& each : jumps) consider(each.at);
     consider(0);
     consider(axis.length);
     return best;
@@ -264,7 +263,8 @@ template <class S> struct Reference<S>::Layout {
     S force_unit = 1; // unknown forces are counted in this unit, so that pivots compare like with like
 
     explicit Layout(const Frame& frame);
-    std::vector<Equation<S>> equations(const Frame& frame, const std::vector<std::shared_ptr<const Course>>& courses) const;
+    std::vector<Equation<S>> equations(const Frame& frame,
+                                       const std::vector<std::shared_ptr<const Course>>& courses) const;
 
   private:
     struct End {
@@ -325,8 +325,8 @@ void Reference<S>::Layout::add_state(Equation<S>& equation, const End& end, Comp
         equation.right[load_case] -= factor * row[index(own) + load_case];
 }
 
-/// The law of each joint: rigid, the two movements agree; free, no force; spring, force on the member = k (node's movement less
-/// the member's).
+/// The law of each joint: rigid, the two movements agree; free, no force; spring, force on the member = k (node's
+/// movement less the member's).
 template <class S> void Reference<S>::Layout::add_joints(std::vector<Equation<S>>& equations, const End& end) const {
     const S c = end.course->axis.cosine;
     const S s = end.course->axis.sine;
@@ -380,8 +380,7 @@ void Reference<S>::Layout::add_support(std::vector<Equation<S>>& equations, cons
         const S k = joints[i]->kind == Joint::Kind::rigid ? S(1) : S(joints[i]->stiffness);
         if (joints[i]->kind != Joint::Kind::rigid) law.terms.emplace_back(own, force_unit);
         if (joints[i]->kind != Joint::Kind::free)
-            for (int j = 0; j < 3; ++j)
-                law.terms.emplace_back(at + j, k * axes[i][index(j)]);
+            for (int j = 0; j < 3; ++j) law.terms.emplace_back(at + j, k * axes[i][index(j)]);
         for (std::size_t load_case = 0; load_case < frame.cases.size(); ++load_case)
             for (const Load& load : frame.cases[load_case].loads)
                 if (load.kind == Load::Kind::movement && load.on == number)
@@ -427,11 +426,9 @@ Reference<S>::Layout::equations(const Frame& frame, const std::vector<std::share
         add_to_node(all, first);
         add_to_node(all, second);
     }
-    for (std::size_t i = 0; i < frame.supports.size(); ++i)
-        add_support(all, frame, static_cast<int>(i));
+    for (std::size_t i = 0; i < frame.supports.size(); ++i) add_support(all, frame, static_cast<int>(i));
     for (std::size_t i = 0; i < turns.size(); ++i)
-        if (!turns[i])
-            all[index(node[i] + 2)] = {{{node[i] + 2, S(1)}}, std::vector<S>(frame.cases.size(), S(0))};
+        if (!turns[i]) all[index(node[i] + 2)] = {{{node[i] + 2, S(1)}}, std::vector<S>(frame.cases.size(), S(0))};
     return all;
 }
 
@@ -469,7 +466,8 @@ template <class S> Place<S> Reference<S>::place(int load_case, int member, doubl
         S sum = state[component][index(6 + course.hinges + load_case)];
         for (int column = 0; column < 6 + course.hinges; ++column) {
             const S scale = column >= axial && column < 6 ? layout_->force_unit : S(1);
-            sum += state[component][index(column)] * unknowns_[index(layout_->member[index(member)] + column)][index(load_case)] * scale;
+            sum += state[component][index(column)] *
+                   unknowns_[index(layout_->member[index(member)] + column)][index(load_case)] * scale;
         }
         return sum;
     };

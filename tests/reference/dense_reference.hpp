@@ -1,14 +1,15 @@
 #pragma once
 // The reference solution of a plane frame. It shares nothing with the program, not even the method.
 //
-// Method of initial parameters (W. D. Pilkey, Formulas for Stress, Strain, and Structural Matrices, 2nd ed. 2005, ch. 11; cited from
-// memory): the state of a member at a place s, three movements and three internal forces, follows from its state at the start
-// by integrating the field equations
+// Method of initial parameters (W. D. Pilkey, Formulas for Stress, Strain, and Structural Matrices, 2nd ed. 2005, ch.
+// 11; cited from memory): the state of a member at a place s, three movements and three internal forces, follows from
+// its state at the start by integrating the field equations
 //     dN/ds = -p      dV/ds = q      dM/ds = V                                   (p along, q across, per length)
 //     du/ds = N/EA + e0      dr/ds = M/EI + k0      dw/ds = r - V/GAs            (e0, k0: free strain and curvature)
-// piece by piece, each with polynomials of s. The unknowns are the nodes' movements, the reactions and every member's six initial
-// parameters (one more a hinge); the equations are the joints at both ends, equilibrium of the nodes and the supports' laws.
-// Nothing is condensed, no stiffness matrix or fixed-end force appears, a release is its own law and not a limit.
+// piece by piece, each with polynomials of s. The unknowns are the nodes' movements, the reactions and every member's
+// six initial parameters (one more a hinge); the equations are the joints at both ends, equilibrium of the nodes and
+// the supports' laws. Nothing is condensed, no stiffness matrix or fixed-end force appears, a release is its own law
+// and not a limit.
 
 #include "frame.hpp"
 
@@ -17,16 +18,10 @@
 
 namespace reference {
 
-template <class S> struct Movement {
-    S x, y, rotation;
-};
-template <class S> struct Force {
-    S x, y, moment;
-};
+template <class S> struct Movement { S x, y, rotation; };
+template <class S> struct Force { S x, y, moment; };
 /// What a member carries and how it moves at one place, signs as in docs/results.md.
-template <class S> struct Place {
-    S N, V, M, along, across, rotation;
-};
+template <class S> struct Place { S N, V, M, along, across, rotation; };
 
 template <class S> class Reference {
   public:

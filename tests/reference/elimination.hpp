@@ -1,6 +1,6 @@
 #pragma once
-// Gaussian elimination with partial pivoting for unsymmetric equations, several right-hand sides. Each row is stored from its
-// first to its last coefficient, so that chains of any length stay cheap.
+// Gaussian elimination with partial pivoting for unsymmetric equations, several right-hand sides. Each row is stored
+// from its first to its last coefficient, so that chains of any length stay cheap.
 
 #include "number.hpp"
 
@@ -25,8 +25,7 @@ template <class S> class Elimination {
     Elimination(const std::vector<Equation<S>>& equations, int cases) : cases_(cases) {
         const auto size = equations.size();
         starting_at_.resize(size + 1);
-        for (const auto& equation : equations)
-            take(equation);
+        for (const auto& equation : equations) take(equation);
     }
 
     Solved<S> solve() {
@@ -70,13 +69,10 @@ template <class S> class Elimination {
 
     static void scale(Row& row) {
         S largest = 0;
-        for (const S& value : row.values)
-            largest = std::max(largest, magnitude(value));
+        for (const S& value : row.values) largest = std::max(largest, magnitude(value));
         if (largest == 0) return;
-        for (S& value : row.values)
-            value /= largest;
-        for (S& value : row.right)
-            value /= largest;
+        for (S& value : row.values) value /= largest;
+        for (S& value : row.right) value /= largest;
     }
 
     /// Drops leading zeros and files the row under its first unknown.
@@ -106,8 +102,7 @@ template <class S> class Elimination {
         const S factor = row.values.front() / pivot.values.front();
         for (std::size_t i = 1; i < pivot.values.size(); ++i)
             if (pivot.values[i] != 0) row.values[i] -= factor * pivot.values[i];
-        for (std::size_t i = 0; i < row.right.size(); ++i)
-            row.right[i] -= factor * pivot.right[i];
+        for (std::size_t i = 0; i < row.right.size(); ++i) row.right[i] -= factor * pivot.right[i];
         row.values.front() = 0;
         settle(number);
     }

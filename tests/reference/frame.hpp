@@ -1,6 +1,6 @@
 #pragma once
-// A plane frame as plain data for the reference solution, in SI, with the axes and signs of docs/model.md. It is kept apart
-// from the program's own model on purpose: the two meet only in the TOML text and in the JSON.
+// A plane frame as plain data for the reference solution, in SI, with the axes and signs of docs/model.md. It is kept
+// apart from the program's own model on purpose: the two meet only in the TOML text and in the JSON.
 
 #include <string>
 #include <vector>
@@ -69,17 +69,17 @@ struct Load {
     enum class Axes { global, plan, member };
     Kind kind = Kind::node;
     Axes axes = Axes::global;
-    int on = 0;              ///< index of the member, node or support
-    bool whole = false;      ///< a distributed load on the whole member: a and b say nothing
-    double a = 0, b = 0;     ///< m from the member's start
-    double first_a = 0;      ///< x or along: N/m at a, N of a point or node load, m of a support movement
-    double second_a = 0;     ///< y or across
-    double first_b = 0;      ///< N/m at b
-    double second_b = 0;     ///< N/m at b
-    double moment = 0;       ///< N m; rad of a support movement
-    double top = 0;          ///< K at the face at +across
-    double bottom = 0;       ///< K
-    double amount = 0;       ///< m of lack of fit, or the factor of self-weight
+    int on = 0;          ///< index of the member, node or support
+    bool whole = false;  ///< a distributed load on the whole member: a and b say nothing
+    double a = 0, b = 0; ///< m from the member's start
+    double first_a = 0;  ///< x or along: N/m at a, N of a point or node load, m of a support movement
+    double second_a = 0; ///< y or across
+    double first_b = 0;  ///< N/m at b
+    double second_b = 0; ///< N/m at b
+    double moment = 0;   ///< N m; rad of a support movement
+    double top = 0;      ///< K at the face at +across
+    double bottom = 0;   ///< K
+    double amount = 0;   ///< m of lack of fit, or the factor of self-weight
 };
 
 struct Case {

@@ -9,7 +9,20 @@ namespace {
 
 std::size_t index(int i) { return static_cast<std::size_t>(i); }
 
-enum Dimension { length, area, inertia, force, moment, line_force, turning, stress, temperature, expansion, density, angle };
+enum Dimension {
+    length,
+    area,
+    inertia,
+    force,
+    moment,
+    line_force,
+    turning,
+    stress,
+    temperature,
+    expansion,
+    density,
+    angle
+};
 
 struct Unit {
     const char* name; ///< empty: a bare number
@@ -25,26 +38,77 @@ constexpr double pound = 0.45359237;
 constexpr double fahrenheit = 5.0 / 9.0;
 
 const UnitTable& table(Units units) {
-    static const UnitTable si{{{"m", 1}, {"m2", 1}, {"m4", 1}, {"N", 1}, {"N m", 1}, {"N/m", 1}, {"N m/rad", 1}, {"Pa", 1},
-                               {"K", 1}, {"1/K", 1}, {"kg/m3", 1}, {"rad", 1}}};
-    static const UnitTable bare_si{{{"", 1}, {"", 1}, {"", 1}, {"", 1}, {"", 1}, {"", 1}, {"", 1}, {"", 1},
-                                    {"", 1}, {"", 1}, {"kg/m3", 1}, {"rad", 1}}};
-    static const UnitTable millimetre{{{"mm", 1e-3}, {"mm2", 1e-6}, {"mm^4", 1e-12}, {"N", 1}, {"N*mm", 1e-3},
-                                       {"N/mm", 1e3}, {"N mm/rad", 1e-3}, {"MPa", 1e6}, {"degC", 1}, {"/K", 1},
-                                       {"t/m³", 1e3}, {"mrad", 1e-3}}};
-    static const UnitTable us{{{"ft", foot}, {"in²", inch * inch}, {"in4", inch * inch * inch * inch}, {"kip", kip},
-                               {"kip ft", kip * foot}, {"lbf/ft", lbf / foot}, {"kip ft/rad", kip * foot},
-                               {"ksi", kip / (inch * inch)}, {"degF", fahrenheit}, {"1/degF", 1 / fahrenheit},
-                               {"lb/ft3", pound / (foot * foot * foot)}, {"rad", 1}}};
-    static const UnitTable bare_us{{{"", foot}, {"", foot * foot}, {"", foot * foot * foot * foot}, {"", kip},
-                                    {"", kip * foot}, {"", kip / foot}, {"", kip * foot}, {"", kip / (foot * foot)},
-                                    {"", 1}, {"", 1}, {"lb/ft3", pound / (foot * foot * foot)}, {"rad", 1}}};
+    static const UnitTable si{{{"m", 1},
+                               {"m2", 1},
+                               {"m4", 1},
+                               {"N", 1},
+                               {"N m", 1},
+                               {"N/m", 1},
+                               {"N m/rad", 1},
+                               {"Pa", 1},
+                               {"K", 1},
+                               {"1/K", 1},
+                               {"kg/m3", 1},
+                               {"rad", 1}}};
+    static const UnitTable bare_si{{{"", 1},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"kg/m3", 1},
+                                    {"rad", 1}}};
+    static const UnitTable millimetre{{{"mm", 1e-3},
+                                       {"mm2", 1e-6},
+                                       {"mm^4", 1e-12},
+                                       {"N", 1},
+                                       {"N*mm", 1e-3},
+                                       {"N/mm", 1e3},
+                                       {"N mm/rad", 1e-3},
+                                       {"MPa", 1e6},
+                                       {"degC", 1},
+                                       {"/K", 1},
+                                       {"t/m³", 1e3},
+                                       {"mrad", 1e-3}}};
+    static const UnitTable us{{{"ft", foot},
+                               {"in²", inch * inch},
+                               {"in4", inch * inch * inch * inch},
+                               {"kip", kip},
+                               {"kip ft", kip * foot},
+                               {"lbf/ft", lbf / foot},
+                               {"kip ft/rad", kip * foot},
+                               {"ksi", kip / (inch * inch)},
+                               {"degF", fahrenheit},
+                               {"1/degF", 1 / fahrenheit},
+                               {"lb/ft3", pound / (foot * foot * foot)},
+                               {"rad", 1}}};
+    static const UnitTable bare_us{{{"", foot},
+                                    {"", foot * foot},
+                                    {"", foot * foot * foot * foot},
+                                    {"", kip},
+                                    {"", kip * foot},
+                                    {"", kip / foot},
+                                    {"", kip * foot},
+                                    {"", kip / (foot * foot)},
+                                    {"", 1},
+                                    {"", 1},
+                                    {"lb/ft3", pound / (foot * foot * foot)},
+                                    {"rad", 1}}};
     switch (units) {
-    case Units::bare_si: return bare_si;
-    case Units::millimetre_newton: return millimetre;
-    case Units::us: return us;
-    case Units::bare_us: return bare_us;
-    default: return si;
+    case Units::bare_si:
+        return bare_si;
+    case Units::millimetre_newton:
+        return millimetre;
+    case Units::us:
+        return us;
+    case Units::bare_us:
+        return bare_us;
+    default:
+        return si;
     }
 }
 
@@ -60,8 +124,7 @@ class Writer {
         write_nodes();
         write_members();
         write_supports();
-        for (const Case& each : frame_.cases)
-            write_case(each);
+        for (const Case& each : frame_.cases) write_case(each);
         return text_;
     }
 
@@ -81,8 +144,8 @@ class Writer {
     void write_materials() {
         for (std::size_t i = 0; i < frame_.materials.size(); ++i) {
             const Material& each = frame_.materials[i];
-            text_ += fmt::format("[materials.q{}]\nE = {}\nG = {}\ndensity = {}\nexpansion = {}\n", i, quantity(each.E, stress),
-                                 quantity(each.G, stress), quantity(each.density, density),
+            text_ += fmt::format("[materials.q{}]\nE = {}\nG = {}\ndensity = {}\nexpansion = {}\n", i,
+                                 quantity(each.E, stress), quantity(each.G, stress), quantity(each.density, density),
                                  quantity(each.expansion, expansion));
         }
     }
@@ -151,9 +214,9 @@ class Writer {
     void write_supports() {
         text_ += "[supports]\n";
         for (const Support& each : frame_.supports) {
-            text_ += fmt::format("{} = {{ x = {}, y = {}, rotation = {}", name(each.node),
-                                 held(each.held.first, line_force), held(each.held.second, line_force),
-                                 held(each.held.rotation, turning));
+            text_ +=
+                fmt::format("{} = {{ x = {}, y = {}, rotation = {}", name(each.node), held(each.held.first, line_force),
+                            held(each.held.second, line_force), held(each.held.rotation, turning));
             if (each.angle != 0) text_ += fmt::format(", angle = {}", quantity(each.angle, angle));
             text_ += " }\n";
         }
@@ -161,32 +224,40 @@ class Writer {
 
     void write_case(const Case& each) {
         text_ += fmt::format("[cases.{}]\nloads = [\n", each.name);
-        for (const Load& load : each.loads)
-            text_ += fmt::format("  {{ {} }},\n", entry(load));
+        for (const Load& load : each.loads) text_ += fmt::format("  {{ {} }},\n", entry(load));
         text_ += "]\n";
     }
 
     std::string entry(const Load& load) const {
         const auto member = [&] { return fmt::format("member = \"{}\"", frame_.members[index(load.on)].name); };
         switch (load.kind) {
-        case Load::Kind::self_weight: return fmt::format("self_weight = {:.17g}", load.amount);
-        case Load::Kind::distributed: return member() + distributed(load);
-        case Load::Kind::point: return member() + components(load, force, moment) + ", at = " + quantity(load.a, length);
-        case Load::Kind::node: return fmt::format("node = \"{}\"", name(load.on)) + components(load, force, moment);
-        case Load::Kind::lack_of_fit: return fmt::format("{}, lack_of_fit = {}", member(), quantity(load.amount, length));
+        case Load::Kind::self_weight:
+            return fmt::format("self_weight = {:.17g}", load.amount);
+        case Load::Kind::distributed:
+            return member() + distributed(load);
+        case Load::Kind::point:
+            return member() + components(load, force, moment) + ", at = " + quantity(load.a, length);
+        case Load::Kind::node:
+            return fmt::format("node = \"{}\"", name(load.on)) + components(load, force, moment);
+        case Load::Kind::lack_of_fit:
+            return fmt::format("{}, lack_of_fit = {}", member(), quantity(load.amount, length));
         case Load::Kind::temperature:
-            if (load.top == load.bottom) return fmt::format("{}, temperature = {}", member(), quantity(load.top, temperature));
-            return fmt::format("{}, temperature = {{ top = {}, bottom = {} }}", member(), quantity(load.top, temperature),
-                               quantity(load.bottom, temperature));
-        default: return movement(load);
+            if (load.top == load.bottom)
+                return fmt::format("{}, temperature = {}", member(), quantity(load.top, temperature));
+            return fmt::format("{}, temperature = {{ top = {}, bottom = {} }}", member(),
+                               quantity(load.top, temperature), quantity(load.bottom, temperature));
+        default:
+            return movement(load);
         }
     }
 
     std::string components(const Load& load, Dimension of_force, Dimension of_moment) const {
         const bool local = load.axes == Load::Axes::member;
         std::string list;
-        if (load.first_a != 0) list += fmt::format(", {} = {}", local ? "along" : "x", quantity(load.first_a, of_force));
-        if (load.second_a != 0) list += fmt::format(", {} = {}", local ? "across" : "y", quantity(load.second_a, of_force));
+        if (load.first_a != 0)
+            list += fmt::format(", {} = {}", local ? "along" : "x", quantity(load.first_a, of_force));
+        if (load.second_a != 0)
+            list += fmt::format(", {} = {}", local ? "across" : "y", quantity(load.second_a, of_force));
         if (load.moment != 0) list += fmt::format(", moment = {}", quantity(load.moment, of_moment));
         return list;
     }
@@ -204,12 +275,15 @@ class Writer {
         std::string list;
         const auto add = [&](const char* key, double a, double b) {
             if (a == 0 && b == 0) return;
-            if (a == b) list += fmt::format(", {} = {}", key, quantity(a, line_force));
-            else list += fmt::format(", {} = [{}, {}]", key, quantity(a, line_force), quantity(b, line_force));
+            if (a == b)
+                list += fmt::format(", {} = {}", key, quantity(a, line_force));
+            else
+                list += fmt::format(", {} = [{}, {}]", key, quantity(a, line_force), quantity(b, line_force));
         };
         add(local ? "along" : "x", load.first_a, load.first_b);
         add(local ? "across" : "y", load.second_a, load.second_b);
-        if (!load.whole) list += fmt::format(", between = [{}, {}]", quantity(load.a, length), quantity(load.b, length));
+        if (!load.whole)
+            list += fmt::format(", between = [{}, {}]", quantity(load.a, length), quantity(load.b, length));
         if (load.axes == Load::Axes::plan) list += ", per = \"plan\"";
         return list;
     }

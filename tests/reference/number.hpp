@@ -12,8 +12,7 @@ template <class S> S magnitude(S x) { return x < 0 ? -x : x; }
 /// Square root: the long double's, then two Newton steps, each doubling the digits.
 template <class S> S square_root(S x) {
     S root = std::sqrt(static_cast<long double>(x));
-    for (int step = 0; step < 2; ++step)
-        root = (root + x / root) / 2;
+    for (int step = 0; step < 2; ++step) root = (root + x / root) / 2;
     return root;
 }
 
@@ -22,7 +21,8 @@ template <class S> struct Direction {
     S sine;
 };
 
-/// Cosine and sine of an angle of a few radians by their power series; 60 terms leave nothing at 113 bits for |angle| < 2 pi.
+/// Cosine and sine of an angle of a few radians by their power series; 60 terms leave nothing at 113 bits for |angle| <
+/// 2 pi.
 template <class S> Direction<S> direction_of(double angle) {
     Direction<S> sum{1, 0};
     S term = 1;

@@ -24,11 +24,21 @@ class Builder {
     Frame structure() {
         add_properties();
         switch (dice_.whole(0, 4)) {
-        case 0: add_beam(); break;
-        case 1: add_storeys(); break;
-        case 2: add_truss(); break;
-        case 3: add_tree(); break;
-        default: add_chain(); break;
+        case 0:
+            add_beam();
+            break;
+        case 1:
+            add_storeys();
+            break;
+        case 2:
+            add_truss();
+            break;
+        case 3:
+            add_tree();
+            break;
+        default:
+            add_chain();
+            break;
         }
         return frame_;
     }
@@ -39,7 +49,8 @@ class Builder {
     void add_properties() {
         for (int i = 0; i < 3; ++i) {
             const double E = dice_.spread(8e9, 2.1e11);
-            frame_.materials.push_back({E, E / dice_.between(2.2, 2.8), dice_.between(400, 8000), dice_.between(5e-6, 25e-6)});
+            frame_.materials.push_back(
+                {E, E / dice_.between(2.2, 2.8), dice_.between(400, 8000), dice_.between(5e-6, 25e-6)});
         }
         for (int i = 0; i < 4; ++i) {
             Section section;
@@ -56,8 +67,9 @@ class Builder {
 
     /// Rectangle of 250 x 600 mm with its usual shear area, 5/6 A.
     static Section rectangle() {
-        return {0.25 * 0.6, 0.25 * 0.6 * 0.6 * 0.6 / 12, 0.6, 0.25 * 0.6 * 5 / 6, 0.3,
-                "shape = \"rectangle\"\nwidth = \"250 mm\"\ndepth = \"600 mm\"\nshear = true\n"};
+        return {0.25 * 0.6, 0.25 * 0.6 * 0.6 * 0.6 / 12,
+                0.6,        0.25 * 0.6 * 5 / 6,
+                0.3,        "shape = \"rectangle\"\nwidth = \"250 mm\"\ndepth = \"600 mm\"\nshear = true\n"};
     }
 
     /// Tee of depth 400 mm, web 60 mm, flange 300 x 50 mm at +across, by the composite-area rule.
@@ -67,7 +79,9 @@ class Builder {
         const double top = (flange * 0.025 + web * (0.05 + 0.175)) / A; // centroid from the flange's outer face
         const double I = 0.3 * 0.05 * 0.05 * 0.05 / 12 + flange * (top - 0.025) * (top - 0.025) +
                          0.06 * 0.35 * 0.35 * 0.35 / 12 + web * (0.225 - top) * (0.225 - top);
-        return {A, I, 0.4, 0, top, "shape = \"tee\"\ndepth = \"400 mm\"\nwidth = \"300 mm\"\nweb = \"60 mm\"\nflange = \"50 mm\"\n"};
+        return {A,   I,
+                0.4, 0,
+                top, "shape = \"tee\"\ndepth = \"400 mm\"\nwidth = \"300 mm\"\nweb = \"60 mm\"\nflange = \"50 mm\"\n"};
     }
 
     int add_node(double x, double y) {
@@ -77,8 +91,15 @@ class Builder {
 
     Member& add_member(int from, int to) {
         if (dice_.chance(0.3)) std::swap(from, to);
-        Member member{"m" + std::to_string(frame_.members.size()), from, to, dice_.whole(0, count(frame_.sections) - 1),
-                      dice_.whole(0, count(frame_.materials) - 1), {}, {}, 1, {}};
+        Member member{"m" + std::to_string(frame_.members.size()),
+                      from,
+                      to,
+                      dice_.whole(0, count(frame_.sections) - 1),
+                      dice_.whole(0, count(frame_.materials) - 1),
+                      {},
+                      {},
+                      1,
+                      {}};
         if (dice_.chance(0.2)) member.factor = dice_.between(0.3, 1.5);
         frame_.members.push_back(member);
         return frame_.members.back();
@@ -125,8 +146,10 @@ class Builder {
             place += dice_.between(1.5, 9);
             const int node = add_node(1.5 + place * std::cos(slope), -2 + place * std::sin(slope));
             Member& member = add_member(before, node);
-            if (dice_.chance(0.5)) release_at_random(member);
-            else hinge_at_random(member, 0.3);
+            if (dice_.chance(0.5))
+                release_at_random(member);
+            else
+                hinge_at_random(member, 0.3);
             add_support(node, dice_.chance(0.2), 0.2);
             before = node;
         }
@@ -136,24 +159,24 @@ class Builder {
         const int bays = dice_.whole(1, 3);
         const int storeys = dice_.whole(1, 3);
         std::vector<double> x{0}, y{0};
-        for (int i = 0; i < bays; ++i)
-            x.push_back(x.back() + dice_.between(3, 8));
-        for (int i = 0; i < storeys; ++i)
-            y.push_back(y.back() + dice_.between(2.5, 5));
+        for (int i = 0; i < bays; ++i) x.push_back(x.back() + dice_.between(3, 8));
+        for (int i = 0; i < storeys; ++i) y.push_back(y.back() + dice_.between(2.5, 5));
         const auto node = [&](int bay, int storey) { return storey * (bays + 1) + bay; };
         for (int storey = 0; storey <= storeys; ++storey)
             for (int bay = 0; bay <= bays; ++bay)
-                add_node(x[index(bay)] + (storey > 0 ? dice_.between(-0.4, 0.4) : 0), y[index(storey)] + dice_.between(-0.3, 0.3));
-        for (int bay = 0; bay <= bays; ++bay)
-            add_support(node(bay, 0), true, 0.6);
+                add_node(x[index(bay)] + (storey > 0 ? dice_.between(-0.4, 0.4) : 0),
+                         y[index(storey)] + dice_.between(-0.3, 0.3));
+        for (int bay = 0; bay <= bays; ++bay) add_support(node(bay, 0), true, 0.6);
         for (int storey = 1; storey <= storeys; ++storey)
             for (int bay = 0; bay <= bays; ++bay) {
                 add_member(node(bay, storey - 1), node(bay, storey));
                 if (dice_.chance(0.3)) release_at_random(frame_.members.back());
                 if (bay == 0) continue;
                 add_member(node(bay - 1, storey), node(bay, storey));
-                if (dice_.chance(0.5)) release_at_random(frame_.members.back());
-                else hinge_at_random(frame_.members.back(), 0.3);
+                if (dice_.chance(0.5))
+                    release_at_random(frame_.members.back());
+                else
+                    hinge_at_random(frame_.members.back(), 0.3);
             }
     }
 
@@ -213,8 +236,10 @@ class Builder {
             const double rise = i < links ? dice_.between(0.5, 3) : dice_.between(-1, 1);
             const int node = add_node(2.5 * i + dice_.between(-0.8, 0.8), rise);
             add_member(before, node);
-            if (dice_.chance(0.15)) release_at_random(frame_.members.back());
-            else hinge_at_random(frame_.members.back(), 0.1);
+            if (dice_.chance(0.15))
+                release_at_random(frame_.members.back());
+            else
+                hinge_at_random(frame_.members.back(), 0.1);
             before = node;
         }
         add_support(before, true, 0.7);
@@ -231,8 +256,10 @@ class Loader {
 
     void add_forces(Case& load_case, int loads) {
         for (int i = 0; i < loads; ++i) {
-            if (dice_.chance(0.6)) load_case.loads.push_back(distributed());
-            else add_point_loads(frame_, load_case, dice_, 1);
+            if (dice_.chance(0.6))
+                load_case.loads.push_back(distributed());
+            else
+                add_point_loads(frame_, load_case, dice_, 1);
         }
     }
 

@@ -7,8 +7,8 @@
 
 namespace reference {
 
-/// Pseudo-random numbers that are the same with every library: SplitMix64 (G. L. Steele, D. Lea, C. H. Flood, Fast splittable
-/// pseudorandom number generators, 2014; constants from memory, any odd mixing constants would do).
+/// Pseudo-random numbers that are the same with every library: SplitMix64 (G. L. Steele, D. Lea, C. H. Flood, Fast
+/// splittable pseudorandom number generators, 2014; constants from memory, any odd mixing constants would do).
 class Dice {
   public:
     explicit Dice(std::uint64_t seed) : state_(seed * 0x2545F4914F6CDD1DULL + 1) {}
@@ -25,9 +25,9 @@ class Dice {
     std::uint64_t state_;
 };
 
-/// A stable frame: continuous beams (hinges included), frames of several storeys, trusses, trees, irregular chains; with mixed
-/// sections, releases, supports and cases that hold every kind of load.
-/// Cases: "forces" (nodal and member loads), "strains" (temperature, lack of fit, support movements), "mixed" (all, self-weight too).
+/// A stable frame: continuous beams (hinges included), frames of several storeys, trusses, trees, irregular chains;
+/// with mixed sections, releases, supports and cases that hold every kind of load. Cases: "forces" (nodal and member
+/// loads), "strains" (temperature, lack of fit, support movements), "mixed" (all, self-weight too).
 Frame random_frame(std::uint64_t seed);
 
 /// The structure of random_frame(seed) alone, without cases.

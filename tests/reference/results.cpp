@@ -11,7 +11,8 @@ namespace reference {
 
 namespace {
 
-/// Movements can be exactly 0 as well (a node between two fixed supports): round-off is seen against 1e-3 of this, m and rad.
+/// Movements can be exactly 0 as well (a node between two fixed supports): round-off is seen against 1e-3 of this, m
+/// and rad.
 constexpr double small_movement = 1e-6;
 
 std::size_t index(int i) { return static_cast<std::size_t>(i); }
@@ -21,7 +22,7 @@ std::vector<PlaceValues> program_places(const test::Result& result, const std::s
     for (std::size_t i = 0; i < places.size(); ++i) {
         const std::string at = fmt::format("{}/{}/", path, i);
         PlaceValues& each = places[i];
-        each = {result(at + "at"), false, result(at + "N"), result(at + "V"), result(at + "M"), result(at + "along"),
+        each = {result(at + "at"),    false, result(at + "N"), result(at + "V"), result(at + "M"), result(at + "along"),
                 result(at + "across")};
         each.after = i > 0 && each.at == places[i - 1].at;
     }
@@ -88,8 +89,8 @@ ResponseValues reference_response(const Reference<S>& solution, int load_case, c
         std::vector<PlaceValues> places = listed.members[index(member)];
         for (PlaceValues& each : places) {
             const auto place = solution.place(load_case, member, each.at, each.after);
-            each = {each.at, each.after, number(place.N), number(place.V), number(place.M), number(place.along),
-                    number(place.across)};
+            each = {each.at,         each.after,          number(place.N),     number(place.V),
+                    number(place.M), number(place.along), number(place.across)};
         }
         response.members.push_back(std::move(places));
     }
@@ -153,10 +154,8 @@ Difference difference(const ResponseValues& expected, const ResponseValues& got,
         }
     Difference worst;
     const auto report = [&worst](double family, std::initializer_list<const Kind*> kinds) {
-        for (const Kind* kind : kinds)
-            family = std::max(family, kind->largest());
-        for (const Kind* kind : kinds)
-            kind->report(family, worst);
+        for (const Kind* kind : kinds) family = std::max(family, kind->largest());
+        for (const Kind* kind : kinds) kind->report(family, worst);
     };
     // a rotation is small beside the translation that it makes over a metre
     const double translation = std::max({x.largest(), y.largest(), along.largest(), across.largest()});

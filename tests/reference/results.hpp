@@ -1,5 +1,6 @@
 #pragma once
-// One response of the program or of the reference as plain numbers, by the indices of a reference frame, and how to compare two.
+// One response of the program or of the reference as plain numbers, by the indices of a reference frame, and how to
+// compare two.
 
 #include "dense_reference.hpp"
 #include "frame.hpp"
@@ -40,10 +41,12 @@ ResponseValues reference_response(const Reference<S>& solution, int load_case, c
 /// factor x a + b, of responses with the same places.
 ResponseValues scaled_sum(double factor, const ResponseValues& a, const ResponseValues& b);
 
-/// The largest difference, each relative to the largest of its kind (translation, rotation, force by N, V and reactions, moment).
-/// A kind that is small beside its family counts as 1e-3 of the family (N beside V): its exact value may be 0.
-/// \param small_force strains in a statically determinate frame cause exactly no force: their round-off is seen against 1e-3 of
-///        this, N and N m; the loads of the random frames are ten times the default, restrained strains cause a thousand times it
+/// The largest difference, each relative to the largest of its kind (translation, rotation, force by N, V and
+/// reactions, moment). A kind that is small beside its family counts as 1e-3 of the family (N beside V): its exact
+/// value may be 0. \param small_force strains in a statically determinate frame cause exactly no force: their round-off
+/// is seen against 1e-3 of
+///        this, N and N m; the loads of the random frames are ten times the default, restrained strains cause a
+///        thousand times it
 struct Difference {
     double relative = 0;
     std::string where; ///< what differs most

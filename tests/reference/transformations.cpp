@@ -69,7 +69,8 @@ std::vector<Load> per_length(const Frame& frame, const Case& load_case) {
 }
 
 bool is_global_force(const Load& load) {
-    const bool force = load.kind == Load::Kind::distributed || load.kind == Load::Kind::point || load.kind == Load::Kind::node;
+    const bool force =
+        load.kind == Load::Kind::distributed || load.kind == Load::Kind::point || load.kind == Load::Kind::node;
     return force && load.axes != Load::Axes::member;
 }
 
@@ -89,21 +90,19 @@ void reverse(Load& load, double length) {
         load.a = length - b;
     }
     if (load.axes == Load::Axes::member)
-        for (double* along : {&load.first_a, &load.first_b})
-            *along = -*along;
+        for (double* along : {&load.first_a, &load.first_b}) *along = -*along;
 }
 
-/// The mirror image of a load on the mirror image of its member, from and to kept: across is turned over against the material.
+/// The mirror image of a load on the mirror image of its member, from and to kept: across is turned over against the
+/// material.
 void mirror(Load& load, bool swapped) {
     load.moment = -load.moment;
     if (load.kind == Load::Kind::movement) load.first_a = -load.first_a;
     if (is_global_force(load))
-        for (double* x : {&load.first_a, &load.first_b})
-            *x = -*x;
+        for (double* x : {&load.first_a, &load.first_b}) *x = -*x;
     if (swapped) return; // running the other way turns across back
     if (load.axes == Load::Axes::member)
-        for (double* across : {&load.second_a, &load.second_b})
-            *across = -*across;
+        for (double* across : {&load.second_a, &load.second_b}) *across = -*across;
     std::swap(load.top, load.bottom);
 }
 
@@ -148,8 +147,7 @@ const PlaceValues& nearest(const std::vector<PlaceValues>& places, double at, bo
 std::vector<int> random_order(int size, Dice& dice) {
     std::vector<int> order(index(size));
     std::iota(order.begin(), order.end(), 0);
-    for (int i = size - 1; i > 0; --i)
-        std::swap(order[index(i)], order[index(dice.whole(0, i))]);
+    for (int i = size - 1; i > 0; --i) std::swap(order[index(i)], order[index(dice.whole(0, i))]);
     return order;
 }
 
@@ -177,10 +175,8 @@ template <class List> int find_name(const List& list, const std::string& name) {
 Frame turned(const Frame& frame, double angle) {
     const Turn turn = turn_by(angle);
     Frame result = frame;
-    for (Node& node : result.nodes)
-        turn(node.x, node.y);
-    for (Support& support : result.supports)
-        support.angle += angle;
+    for (Node& node : result.nodes) turn(node.x, node.y);
+    for (Support& support : result.supports) support.angle += angle;
     for (Case& load_case : result.cases) {
         load_case.loads = per_length(frame, load_case);
         for (Load& load : load_case.loads) {
@@ -195,26 +191,21 @@ Frame turned(const Frame& frame, double angle) {
 ResponseValues turned(const ResponseValues& values, double angle) {
     const Turn turn = turn_by(angle);
     ResponseValues result = values;
-    for (auto& each : result.movements)
-        turn(each.x, each.y);
-    for (auto& each : result.reactions)
-        turn(each.x, each.y);
+    for (auto& each : result.movements) turn(each.x, each.y);
+    for (auto& each : result.reactions) turn(each.x, each.y);
     return result;
 }
 
 Frame mirrored(const Frame& frame, const std::vector<bool>& swapped) {
     Frame result = frame;
-    for (Node& node : result.nodes)
-        node.x = -node.x;
-    for (Support& support : result.supports)
-        support.angle = -support.angle;
+    for (Node& node : result.nodes) node.x = -node.x;
+    for (Support& support : result.supports) support.angle = -support.angle;
     for (std::size_t i = 0; i < result.members.size(); ++i) {
         if (!swapped[i]) continue;
         Member& member = result.members[i];
         std::swap(member.from, member.to);
         std::swap(member.start, member.end);
-        for (double& hinge : member.hinges)
-            hinge = member_length(frame, static_cast<int>(i)) - hinge;
+        for (double& hinge : member.hinges) hinge = member_length(frame, static_cast<int>(i)) - hinge;
         std::reverse(member.hinges.begin(), member.hinges.end());
     }
     for (Case& load_case : result.cases)
@@ -228,7 +219,8 @@ Frame mirrored(const Frame& frame, const std::vector<bool>& swapped) {
     return result;
 }
 
-ResponseValues mirrored(const ResponseValues& values, const std::vector<bool>& swapped, const std::vector<double>& lengths) {
+ResponseValues mirrored(const ResponseValues& values, const std::vector<bool>& swapped,
+                        const std::vector<double>& lengths) {
     ResponseValues result = values;
     for (auto& each : result.movements) {
         each.x = -each.x;
@@ -253,8 +245,7 @@ ResponseValues mirrored(const ResponseValues& values, const std::vector<bool>& s
         }
         if (!swapped[i]) continue;
         std::reverse(places.begin(), places.end());
-        for (std::size_t j = 0; j < places.size(); ++j)
-            places[j].after = j > 0 && places[j - 1].at == places[j].at;
+        for (std::size_t j = 0; j < places.size(); ++j) places[j].after = j > 0 && places[j - 1].at == places[j].at;
     }
     return result;
 }
@@ -292,7 +283,8 @@ Frame subdivided(const Frame& frame, int parts) {
     for (Case& load_case : result.cases) {
         std::vector<Load> loads;
         for (const Load& load : load_case.loads) {
-            if (load.kind == Load::Kind::node || load.kind == Load::Kind::movement || load.kind == Load::Kind::self_weight) {
+            if (load.kind == Load::Kind::node || load.kind == Load::Kind::movement ||
+                load.kind == Load::Kind::self_weight) {
                 loads.push_back(load);
                 continue;
             }
@@ -300,7 +292,8 @@ Frame subdivided(const Frame& frame, int parts) {
             for (int part = 0; part < parts; ++part) {
                 Load piece = load;
                 piece.on = load.on * parts + part;
-                if (cut(piece, length * part / parts, length * (part + 1) / parts, length, part == 0, part + 1 == parts))
+                if (cut(piece, length * part / parts, length * (part + 1) / parts, length, part == 0,
+                        part + 1 == parts))
                     loads.push_back(piece);
             }
         }
@@ -318,7 +311,8 @@ ResponseValues joined(const ResponseValues& values, const ResponseValues& listed
         std::vector<PlaceValues> places;
         for (const PlaceValues& each : listed.members[index(i)]) {
             const int part = std::clamp(static_cast<int>(std::floor(each.at / part_length + 1e-9)), 0, parts - 1);
-            PlaceValues found = nearest(values.members[index(i * parts + part)], each.at - part * part_length, each.after);
+            PlaceValues found =
+                nearest(values.members[index(i * parts + part)], each.at - part * part_length, each.after);
             found.at = each.at;
             found.after = each.after;
             places.push_back(found);
@@ -339,8 +333,7 @@ Frame shuffled(const Frame& frame, Dice& dice) {
         member.to = nodes[index(member.to)];
         member.section = sections[index(member.section)];
     }
-    for (Support& support : result.supports)
-        support.node = nodes[index(support.node)];
+    for (Support& support : result.supports) support.node = nodes[index(support.node)];
     for (Case& load_case : result.cases) {
         for (Load& load : load_case.loads) {
             if (load.kind == Load::Kind::self_weight) continue;

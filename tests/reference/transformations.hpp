@@ -6,8 +6,8 @@
 
 namespace reference {
 
-/// The frame turned counter-clockwise about the origin. Loads turn with it, so those per plan length and self-weight become loads
-/// per length.
+/// The frame turned counter-clockwise about the origin. Loads turn with it, so those per plan length and self-weight
+/// become loads per length.
 Frame turned(const Frame& frame, double angle);
 /// The results of the turned frame, from those of the frame.
 ResponseValues turned(const ResponseValues& values, double angle);
@@ -15,10 +15,11 @@ ResponseValues turned(const ResponseValues& values, double angle);
 /// The mirror image at the y axis; the members of which `swapped` says so run the other way.
 Frame mirrored(const Frame& frame, const std::vector<bool>& swapped);
 /// The results of the mirror image; `lengths` of the members.
-ResponseValues mirrored(const ResponseValues& values, const std::vector<bool>& swapped, const std::vector<double>& lengths);
+ResponseValues mirrored(const ResponseValues& values, const std::vector<bool>& swapped,
+                        const std::vector<double>& lengths);
 
-/// Every member cut into `parts` equal members, loads cut with them. Parts of member i are i x parts, ...; the nodes of the frame
-/// come first.
+/// Every member cut into `parts` equal members, loads cut with them. Parts of member i are i x parts, ...; the nodes of
+/// the frame come first.
 Frame subdivided(const Frame& frame, int parts);
 /// Results of the frame from those of the subdivided one, at the places of `listed`.
 ResponseValues joined(const ResponseValues& values, const ResponseValues& listed, const Frame& frame, int parts);

@@ -74,10 +74,19 @@ std::string completed(const std::string& example) {
 
 std::string with_article(std::string_view word) { return "name of a " + std::string(word); }
 
+/// What holds for the numbers of a key.
+std::string bounds(const Key& key) {
+    std::string result;
+    if ((key.forms & positive) != 0) result += " above 0";
+    if ((key.forms & not_negative) != 0) result += " not below 0";
+    if ((key.forms & with_unit) != 0) result += ", always with its unit";
+    return result;
+}
+
 /// What a key takes, in a few words.
 std::string takes(const Key& key) {
-    const std::string quantity_words =
-        key.dimension == groundsill::dimension::angle ? "an angle" : dimension_words(key.dimension);
+    const bool is_angle = key.dimension == groundsill::dimension::angle;
+    const std::string measure = (is_angle ? "an angle" : dimension_words(key.dimension)) + bounds(key);
     std::string words;
     each_word(key.words, [&](std::string_view word, bool available) {
         if (available) words += (words.empty() ? "`\"" : ", `\"") + std::string(word) + "\"`";
@@ -88,21 +97,18 @@ std::string takes(const Key& key) {
         if (!result.empty()) result += "; ";
         result += what;
     };
-    add(quantity, quantity_words);
-    add(number | integer, "number");
+    add(quantity, measure);
+    add(number | integer, "a number" + bounds(key));
+    add(pair, "two, each " + measure);
+    add(list, "list, each " + measure);
     add(fraction, "fraction");
     add(boolean, "`true` or `false`");
     add(text, "text");
     add(word, words);
     add(name, with_article(key.words));
     add(names, "list, each the " + with_article(key.words));
-    add(pair, "two, each " + quantity_words);
-    add(list, "list, each " + quantity_words);
     add(table, "table");
     add(tables, "list of tables");
-    if ((key.forms & positive) != 0 && (key.forms & (quantity | number | list)) != 0) result += ", above 0";
-    if ((key.forms & not_negative) != 0) result += ", not negative";
-    if ((key.forms & with_unit) != 0) result += ", always with its unit";
     return result;
 }
 
@@ -131,7 +137,10 @@ class KeyList {
   public:
     std::string text() {
         visit("model", "");
-        return std::string(list_begins) + "\nNAME stands for a name of yours, N for a place in a list.\n" + tables_ +
+        return std::string(list_begins) +
+               "\nNAME stands for a name of yours, N for a place in a list, x|y for x and y alike. A number may be a "
+               "fraction.\n" +
+               tables_ +
                "\n## Known, but not available yet\n\nThese keys are refused, with a message that says so:\n\n" + later_;
     }
 
@@ -148,7 +157,7 @@ class KeyList {
     }
 
     static std::string inner_path(const std::string& path, const GroupKey& entry) {
-        const std::string name = entry.name == "*" ? "NAME" : std::string(entry.name);
+        const std::string name = entry.name == "*" ? "NAME" : std::string(entry.key->name); // "x|y" for both
         const std::string full = path.empty() ? name : path + "." + name;
         return (entry.key->forms & tables) != 0 ? full + "[N]" : full;
     }

@@ -24,7 +24,11 @@ std::filesystem::path models_folder() { return std::filesystem::path(GROUNDSILL_
 test::Result run_worked_model(std::string_view name) {
     std::ifstream file(models_folder() / fmt::format("{}.toml", name));
     REQUIRE(file);
-    return test::run(std::string(std::istreambuf_iterator<char>(file), {}));
+    test::Result result = test::run(std::string(std::istreambuf_iterator<char>(file), {}));
+    CHECK(result.size("/diagnostics/warnings") == 0);
+    CHECK(result("/diagnostics/equilibrium") < 1e-12);
+    CHECK(result("/diagnostics/residual") < 1e-12);
+    return result;
 }
 
 doctest::Approx close_to(double value) { return doctest::Approx(value).epsilon(1e-9); }

@@ -36,13 +36,13 @@ Analysis analysed(const Model& model) {
 
 TEST_SUITE("extremes") {
     TEST_CASE("of two peaks that differ by rounding alone the first place is named") {
-        const DiagramRange range = member_range(humps(100, 100 * (1 + 1e-15)), Quantity::M, {});
+        const DiagramRange range = member_range(humps(100, 100 * (1 + 1e-15)), Curve::M, {});
         CHECK(range.max.at == doctest::Approx(0.5));
         CHECK(range.min.at == 0);
     }
 
     TEST_CASE("a difference above rounding counts") {
-        CHECK(member_range(humps(100, 100.0001), Quantity::M, {}).max.at == doctest::Approx(1.5));
+        CHECK(member_range(humps(100, 100.0001), Curve::M, {}).max.at == doctest::Approx(1.5));
     }
 
     TEST_CASE("movements inside members are found: both ends fixed, δ = wL⁴/384EI = 2 mm at the middle") {
@@ -85,7 +85,7 @@ TEST_SUITE("extremes") {
             CHECK(std::abs(peak.value) <= peaks.rounding.force);
         }
         const DiagramRange axial =
-            member_range(case_diagram(analysis, 0, 0), Quantity::N, round_off(analysis, analysis.cases[0]));
+            member_range(case_diagram(analysis, 0, 0), Curve::N, round_off(analysis, analysis.cases[0]));
         CHECK(axial.max.at == 0);
         CHECK(axial.min.at == 0);
     }

@@ -20,6 +20,10 @@ constexpr double kip = 1000 * pound;
 constexpr double ksi = kip / (inch * inch);
 constexpr double in4 = inch * inch * inch * inch;
 
+// The example takes g = 386 in/s2, the program 9.80665 m/s2 = 386.0886 in/s2: frequencies by 0.18 sqrt(g/Delta) are
+// compared after taking that difference, 1.1e-4, off.
+const double with_rounded_g = std::sqrt(386 * inch / standard_gravity);
+
 // Beams of 30 ft at 10 ft, I_t = 843.2 in4, w_j = 0.5993 kip/ft; girders of 30 ft, I_g = 4315 in4, with 30 ft of that
 // load and 55 lb/ft; d_e = 4.25 in, n = E_s/(1.35 E_c) = 10.06; damping 0.03.
 FloorModel office_floor() {
@@ -84,13 +88,13 @@ TEST_CASE("DG11: office floor of the Structural Steel Designer's Handbook, 6.26 
     check_digits(step(result, "W_j") / kip, 88.750, 1e-3);
     check_digits(step(result, "w_g") / (kip / foot), 1.853, 1e-3);
     check_digits(step(result, "Delta_g") / inch, 0.2699, 1e-4);
-    check_digits(step(result, "f_g"), 6.808, 1e-3);
+    check_digits(with_rounded_g * step(result, "f_g"), 6.808, 1e-3);
     check_digits(step(result, "B_g") / foot, 47.251, 1e-3);
     check_digits(step(result, "W_g") / kip, 87.55, 1e-2);
     check_digits(step(result, "Delta_g_reduced") / inch, 0.246, 1e-3);
     check_digits(step(result, "W") / kip, 88.324, 1e-3);
-    check_digits(step(result, "f_n"), 4.2491, 1e-4);
-    check_digits(step(result, "f_n_estimate"), 4.2491, 1e-4);
+    check_digits(with_rounded_g * step(result, "f_n"), 4.2491, 1e-4);
+    check_digits(with_rounded_g * step(result, "f_n_estimate"), 4.2491, 1e-4);
     check_digits(100 * result.value.value(), 0.55, 1e-2);
     CHECK(result.limit == 0.005);
     CHECK(result.utilisation.value() == doctest::Approx(result.value.value() / 0.005).epsilon(1e-14));
@@ -157,9 +161,9 @@ TEST_CASE("DG11: beams shorter than half the girder are screened alone too, and 
 }
 
 TEST_CASE("DG11: given weight, by hand") {
-    // 65 lb x 4.44822 N/lb = 289.134 N; exp(-0.35 x 5) = 0.1737739; over 0.03 x 395 kN: 0.00423997
+    // 65 lb x 4.44822 N/lb = 289.134 N; exp(-0.35 x 5) = 0.1737739; over 0.03 x 395 kN: 0.00424000
     const auto result = with_weight(5, 395e3);
-    check_digits(result.value.value(), 0.00423997, 1e-8);
+    check_digits(result.value.value(), 0.00424000, 1e-8);
     CHECK(result.passed);
     CHECK(step(result, "W") == 395e3);
 }
@@ -168,14 +172,14 @@ TEST_CASE("DG11: given weight with a girder keeps the weight and lowers the freq
     FloorModel floor = office_floor();
     floor.panel->weight = 88.324 * kip;
     auto result = screened(floor, office_beam());
-    check_digits(step(result, "f_n"), 4.2491, 1e-4);
+    check_digits(with_rounded_g * step(result, "f_n"), 4.2491, 1e-4);
     check_digits(100 * result.value.value(), 0.55, 1e-2);
     // without the slab, B_j is not known and the girder's deflection is not reduced: 0.18 sqrt(386.089/(0.4467 +
     // 0.2699))
     floor.panel->slab_depth.reset();
     floor.panel->slab_E.reset();
     result = screened(floor, office_beam());
-    check_digits(step(result, "f_n"), 4.178, 1e-3);
+    check_digits(with_rounded_g * step(result, "f_n"), 4.178, 1e-3);
 }
 
 TEST_CASE("DG11: limits and forces of Table 4.1") {

@@ -323,7 +323,7 @@ TEST_CASE("supports") {
     }
     Model model = beam();
     model.supports[1].node = 0;
-    only(model, "7 error", "node A has a support already, in line 6");
+    only(model, "7 error", "node A has two supports");
     model = beam();
     model.supports[1].y.kind = Restraint::Kind::free;
     only(model, "7 warning", "support B holds nothing");

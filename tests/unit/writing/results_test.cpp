@@ -3,6 +3,9 @@
 #include <doctest/doctest.h>
 
 #include <algorithm>
+#include <cmath>
+#include <fstream>
+#include <iterator>
 #include <map>
 #include <string>
 
@@ -147,6 +150,20 @@ TEST_SUITE("results in CSV") {
             const std::string header = text.substr(0, text.find('\n'));
             const auto commas = std::count(header.begin(), header.end(), ',');
             CHECK(std::count(text.begin(), text.end(), ',') == commas * lines(text)); // no name here needs quoting
+        }
+    }
+
+    TEST_CASE("docs/results.md names each file and its columns") {
+        std::ifstream file(GROUNDSILL_SOURCE_DIR "/docs/results.md");
+        REQUIRE(file);
+        const std::string manual{std::istreambuf_iterator<char>(file), {}};
+        const Model model = test::combined_beam();
+        const Outcome outcome = analyse(model);
+        REQUIRE(outcome.analysis);
+        for (const auto& [name, text] : csv_of(*outcome.analysis, 4)) {
+            CAPTURE(name);
+            CHECK(manual.find("`" + name + "`") != std::string::npos);
+            CHECK(manual.find("\n" + text.substr(0, text.find('\n') + 1)) != std::string::npos);
         }
     }
 

@@ -175,13 +175,26 @@ TEST_SUITE("sketch") {
         const Model model = test::model_of(portal);
         CHECK(sketch_text(model) == R"(Portal
 
-      B                C
-      o---*------------o
-      |                |
-      |                |
-      |                *
-      F                S
-      A                D
+      B                                                                  C
+      o----------------*-------------------------------------------------o
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  |
+      |                                                                  *
+      F                                                                  S
+      A                                                                  D
 
   o node   P held in x and y   R held in x or y   F fixed   H held otherwise
   S on a spring   * hinge or rotational spring in a member

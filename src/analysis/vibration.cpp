@@ -1,0 +1,302 @@
+#include "analysis/vibration.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <numbers>
+
+#include <fmt/format.h>
+
+#include "analysis/mass_loads.hpp"
+#include "system/eigen_modes.hpp"
+#include "system/member_wise.hpp"
+
+namespace groundsill {
+
+namespace {
+
+/// Longest part of a segment, in lengths 1/β of its bending wave: cubic shapes err by (βh)⁴/1440 in frequency, here 6e-6.
+constexpr double wave = 0.3;
+
+/// Every loaded segment has at least so many parts: its shape between the nodes must be seen even where it is stiff.
+constexpr int fewest_parts = 2;
+
+/// Most parts of one segment; a wave that short is of no structural interest.
+constexpr int most_parts = 200;
+
+int parts_of(const Segment& segment, const SegmentLoadMass& mass, double omega) {
+    Real total = 0;
+    for (const elements::MassLine& line : mass.spread.lines) total += (line.ma + line.mb) / 2 * (line.b - line.a);
+    const Real density = total / segment.frame.length;
+    if (!(density > 0)) return 1;
+    const Real bending = std::pow(density * Real(omega) * omega * segment.frame.bending_flexibility, Real(0.25));
+    // along the axis the error is of fourth order too, (κh)⁴/480 with κ² = m ω²/(E A)
+    const Real axial = std::sqrt(density * segment.frame.axial_flexibility) * Real(omega);
+    const Real wanted = std::ceil(std::max(bending, axial) * segment.frame.length / Real(wave));
+    return static_cast<int>(std::clamp(wanted, Real(fewest_parts), Real(most_parts)));
+}
+
+/// Places at which a segment is cut: evenly, and at its point masses.
+std::vector<Real> cut_places(const Segment& segment, const SegmentLoadMass& mass, int parts) {
+    const Real L = segment.frame.length;
+    std::vector<Real> places;
+    for (int k = 1; k < parts; ++k) places.push_back(L * k / parts);
+    for (const PointMass& point : mass.points) places.push_back(point.a);
+    std::sort(places.begin(), places.end());
+    const Real near = Real(1e-9) * L;
+    std::vector<Real> kept;
+    for (const Real place : places)
+        if (place > near && place < L - near && (kept.empty() || place > kept.back() + near)) kept.push_back(place);
+    return kept;
+}
+
+/// The mass of a part of a segment, from that of the whole.
+elements::SegmentMass part_of(const elements::SegmentMass& whole, Real from, Real length) {
+    elements::SegmentMass part;
+    part.rotary = whole.rotary;
+    for (const elements::MassLine& line : whole.lines) {
+        const Real a = std::max(line.a, from), b = std::min(line.b, from + length);
+        if (!(b > a)) continue;
+        const Real slope = (line.mb - line.ma) / (line.b - line.a);
+        part.lines.push_back({a - from, b - from, line.ma + slope * (a - line.a), line.ma + slope * (b - line.a)});
+    }
+    return part;
+}
+
+/// Adds what a movement of all nodes by 1 along x and y puts on the active directions: M 1, with the fixed directions moving too.
+void add_pull(const Structure& structure, const Segment& part, const elements::EndMatrix& M, VibratingStructure& result) {
+    const double c = static_cast<double>(part.frame.cosine), s = static_cast<double>(part.frame.sine);
+    for (int axis = 0; axis < 2; ++axis) {
+        const double along = axis == 0 ? c : s, across = axis == 0 ? -s : c;
+        std::array<Real, 6> f{};
+        for (int row = 0; row < 6; ++row)
+            f[row] = M[6 * row] * along + M[6 * row + 1] * across + M[6 * row + 3] * along + M[6 * row + 4] * across;
+        std::vector<double>& pull = axis == 0 ? result.pull_x : result.pull_y;
+        for (int end = 0; end < 2; ++end) {
+            const int node = end == 0 ? part.i : part.j;
+            Real x = c * f[3 * end] - s * f[3 * end + 1], y = s * f[3 * end] + c * f[3 * end + 1];
+            if (const TurnedAxes* axes = structure.turned_axes(node)) {
+                const Real turned = axes->cosine * x + axes->sine * y;
+                y = -axes->sine * x + axes->cosine * y;
+                x = turned;
+            }
+            pull[3 * node] += static_cast<double>(x);
+            pull[3 * node + 1] += static_cast<double>(y);
+            pull[3 * node + 2] += static_cast<double>(f[3 * end + 2]);
+        }
+    }
+}
+
+void add_point(const Structure& structure, int node, double mass, VibratingStructure& result) {
+    add_to_node(structure, node, mass, result.mass);
+    const TurnedAxes* axes = structure.turned_axes(node);
+    const double c = axes ? static_cast<double>(axes->cosine) : 1, s = axes ? static_cast<double>(axes->sine) : 0;
+    result.pull_x[3 * node] += mass * c;
+    result.pull_x[3 * node + 1] -= mass * s;
+    result.pull_y[3 * node] += mass * s;
+    result.pull_y[3 * node + 1] += mass * c;
+}
+
+/// The node of the fine structure at a place of a segment.
+int node_at(const VibratingStructure& result, int segment, Real place) {
+    const Structure& fine = result.fine.structure;
+    int best = fine.segments[result.fine.first_part[segment]].i;
+    Real distance = std::abs(place), from = 0;
+    for (int k = result.fine.first_part[segment]; k < result.fine.first_part[segment + 1]; ++k) {
+        from += fine.segments[k].frame.length;
+        if (std::abs(place - from) >= distance) continue;
+        distance = std::abs(place - from);
+        best = fine.segments[k].j;
+    }
+    return best;
+}
+
+/// The largest translation of a mode and where it is; nodes first, then places inside members.
+Mode::Place largest_translation(const Structure& structure, const Mode& mode, double& largest) {
+    Mode::Place place;
+    largest = 0;
+    const double ahead = 1 + 1e-9; // a place inside a member must be ahead of a node by more than round-off
+    for (std::size_t node = 0; node < mode.nodes.size(); ++node) {
+        const double size = std::hypot(mode.nodes[node].x, mode.nodes[node].y);
+        if (size <= largest * ahead) continue;
+        largest = size;
+        place = {static_cast<int>(node), -1, 0};
+    }
+    for (int m = 0; m < static_cast<int>(structure.model->members.size()); ++m) {
+        const Diagram& shape = mode.members[m];
+        const auto size_at = [&](double s) {
+            const DiagramPlace at = shape.value(s);
+            return std::hypot(at.along, at.across);
+        };
+        const DiagramRange range = shape.extremes(Curve::across, 0);
+        for (const double s : {range.max.at, range.min.at}) {
+            if (size_at(s) <= largest * ahead) continue;
+            largest = size_at(s);
+            place = {-1, m, s};
+        }
+    }
+    return place;
+}
+
+/// The shape of one mode along the members: the movement of the fine structure's parts.
+std::vector<Diagram> member_shapes(const Structure& fine, const Movements& u) {
+    std::vector<Diagram> shapes(fine.model->members.size());
+    const elements::Loading none = [] {
+        elements::Loading loading;
+        elements::cut({}, 1, loading);
+        return loading;
+    }();
+    for (const Segment& part : fine.segments) {
+        elements::Loading loading = none;
+        loading.pieces[0].to = part.frame.length;
+        const elements::State start =
+            elements::start_of_shape(part.frame, part.stiffness, end_state(fine, part, false, u), end_state(fine, part, true, u));
+        Diagram& shape = shapes[part.member];
+        elements::append_diagram(part.frame, loading, start, static_cast<double>(part.offset), shape.pieces);
+        shape.length = static_cast<double>(part.offset + part.frame.length);
+    }
+    for (Diagram& shape : shapes) shape.pieces.back().to = shape.length;
+    return shapes;
+}
+
+void scale_shape(double factor, Mode& mode) {
+    for (Mode::NodeShape& node : mode.nodes) {
+        node.x *= factor;
+        node.y *= factor;
+        if (node.rotation) *node.rotation *= factor;
+    }
+    for (Diagram& shape : mode.members)
+        for (DiagramPiece& piece : shape.pieces) {
+            for (double& c : piece.along) c *= factor;
+            for (double& c : piece.across) c *= factor;
+        }
+}
+
+/// Shares of the strain energy by member and by support.
+std::vector<Mode::Share> flexibility_shares(const Structure& fine, const Movements& u) {
+    const Model& model = *fine.model;
+    std::vector<Mode::Share> shares;
+    for (int m = 0; m < static_cast<int>(model.members.size()); ++m) shares.push_back({.member = m});
+    Real total = 0;
+    for (const Segment& part : fine.segments) {
+        const Real energy = strain_energy(part, basic_forces(fine, part, u));
+        shares[part.member].share += static_cast<double>(energy);
+        total += energy;
+    }
+    for (int s = 0; s < static_cast<int>(model.supports.size()); ++s) {
+        const Support& support = model.supports[s];
+        if (!support.x.is_elastic() && !support.y.is_elastic() && !support.rotation.is_elastic()) continue;
+        Real energy = 0;
+        for (int d = 3 * support.node; d < 3 * support.node + 3; ++d) energy += fine.spring[d] * u.value(d) * u.value(d);
+        shares.push_back({.support = s, .share = static_cast<double>(energy)});
+        total += energy;
+    }
+    if (total > 0)
+        for (Mode::Share& share : shares) share.share /= static_cast<double>(total);
+    return shares;
+}
+
+Mode make_mode(const VibratingStructure& vibrating, double lambda, const std::vector<double>& vector, bool rigid) {
+    const Structure& fine = vibrating.fine.structure;
+    const Model& model = *fine.model;
+    Movements u(fine.directions());
+    std::copy(vector.begin(), vector.end(), u.high.begin());
+    Mode mode;
+    mode.frequency = rigid ? 0 : std::sqrt(std::max(lambda, 0.0)) / (2 * std::numbers::pi);
+    for (int node = 0; node < static_cast<int>(model.nodes.size()); ++node) {
+        double x = vector[3 * node], y = vector[3 * node + 1];
+        if (const TurnedAxes* axes = fine.turned_axes(node)) {
+            const double c = static_cast<double>(axes->cosine), s = static_cast<double>(axes->sine);
+            const double turned = c * x - s * y;
+            y = s * x + c * y;
+            x = turned;
+        }
+        mode.nodes.push_back({x, y, std::nullopt});
+        if (fine.has_rotation[node]) mode.nodes.back().rotation = vector[3 * node + 2];
+    }
+    mode.members = member_shapes(fine, u);
+    double largest = 0;
+    mode.largest = largest_translation(fine, mode, largest);
+    // of the two signs that with the largest translation up or to the right
+    const auto sign_at = [&] {
+        if (mode.largest.node >= 0) {
+            const Mode::NodeShape& node = mode.nodes[mode.largest.node];
+            return std::abs(node.y) >= 0.999 * std::abs(node.x) ? node.y : node.x;
+        }
+        return mode.members[mode.largest.member].value(mode.largest.at).across;
+    };
+    if (largest > 0) scale_shape((sign_at() < 0 ? -1 : 1) / largest, mode);
+    // the vector has φᵀ M φ = 1; scaled to largest translation 1 it has 1/largest²
+    mode.modal_mass = largest > 0 ? 1 / (largest * largest) : 0;
+    double gx = 0, gy = 0;
+    for (std::size_t d = 0; d < vector.size(); ++d) {
+        gx += vector[d] * vibrating.pull_x[d];
+        gy += vector[d] * vibrating.pull_y[d];
+    }
+    mode.effective_x = gx * gx;
+    mode.effective_y = gy * gy;
+    mode.flexibility = flexibility_shares(fine, u);
+    return mode;
+}
+
+} // namespace
+
+VibratingStructure cut_for(const Internals& internals, const MassModel& mass, double omega) {
+    const Structure& structure = internals.structure;
+    std::vector<SegmentLoadMass> masses;
+    for (const Segment& segment : structure.segments) masses.push_back(mass_of_segment(internals, mass, segment));
+    VibratingStructure result;
+    result.fine = subdivide(structure, [&](int k) {
+        return cut_places(structure.segments[k], masses[k], parts_of(structure.segments[k], masses[k], omega));
+    });
+    const Structure& fine = result.fine.structure;
+    result.stiffness = assemble(fine);
+    result.mass = zeros_like(result.stiffness);
+    result.pull_x.assign(fine.directions(), 0);
+    result.pull_y.assign(fine.directions(), 0);
+    for (int k = 0; k < static_cast<int>(structure.segments.size()); ++k) {
+        for (int part = result.fine.first_part[k]; part < result.fine.first_part[k + 1]; ++part) {
+            const Segment& segment = fine.segments[part];
+            const elements::EndMatrix M = elements::consistent_mass(
+                segment.frame, segment.stiffness,
+                part_of(masses[k].spread, segment.offset - structure.segments[k].offset, segment.frame.length));
+            add_end_matrix(fine, segment, M, result.mass);
+            add_pull(fine, segment, M, result);
+        }
+        for (const PointMass& point : masses[k].points)
+            add_point(fine, node_at(result, k, point.a), static_cast<double>(point.mass), result);
+    }
+    const std::vector<double> on_nodes = mass_of_nodes(structure, mass);
+    for (int node = 0; node < structure.node_count; ++node)
+        if (on_nodes[node] > 0) add_point(fine, node, on_nodes[node], result);
+    return result;
+}
+
+Vibration find_modes(const Internals& internals, const MassModel& mass, bool is_free) {
+    VibratingStructure vibrating = cut_for(internals, mass, 0);
+    EigenPairs pairs;
+    double fits = 0;
+    for (int round = 0; round < 6; ++round) {
+        pairs = lowest_modes(vibrating.fine.structure, vibrating.stiffness, vibrating.mass, mass.modes, is_free);
+        if (pairs.values.empty()) break;
+        const double omega = std::sqrt(std::max(pairs.values.back(), 0.0));
+        // the parts must fit the highest mode; its own estimate can only fall as they get shorter
+        if (omega <= fits) break;
+        fits = omega;
+        VibratingStructure finer = cut_for(internals, mass, fits);
+        if (finer.fine.structure.node_count == vibrating.fine.structure.node_count) break;
+        vibrating = std::move(finer);
+    }
+    Vibration result;
+    result.modes_missed = pairs.missed;
+    const double largest = pairs.values.empty() ? 0 : std::abs(pairs.values.back());
+    for (std::size_t k = 0; k < pairs.values.size(); ++k)
+        result.modes.push_back(make_mode(vibrating, pairs.values[k], pairs.vectors[k], is_free && pairs.values[k] < 1e-7 * largest));
+    if (pairs.exhausted)
+        result.warnings.push_back(fmt::format("[mass] asks for {} modes, but the mass allows only {} with a finite frequency",
+                                              mass.modes, pairs.values.size()));
+    if (pairs.missed > 0)
+        result.warnings.push_back(fmt::format("{} natural frequencies below the last one listed were not found", pairs.missed));
+    return result;
+}
+
+} // namespace groundsill
