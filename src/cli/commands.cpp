@@ -14,6 +14,7 @@
 #include "cli/exit_codes.hpp"
 #include "cli/output.hpp"
 #include "groundsill/groundsill.hpp"
+#include "writing/sections_text.hpp"
 #include "writing/starters.hpp"
 
 namespace groundsill::cli {
@@ -114,6 +115,17 @@ int sketch_command(const std::string& path) {
     const std::optional<Model> model = model_of(path);
     if (!model) return exit_wrong_input;
     standard_output()(sketch_text(*model));
+    finish_standard_output();
+    return exit_ok;
+}
+
+int sections_command(const std::string& pattern) {
+    const std::string text = sections_text(pattern);
+    if (text.empty()) {
+        complain(fmt::format("error: no section of the tables has \"{}\" in its name; without a pattern all are listed", pattern));
+        return exit_wrong_input;
+    }
+    standard_output()(text);
     finish_standard_output();
     return exit_ok;
 }

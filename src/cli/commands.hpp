@@ -18,6 +18,9 @@ int run_command(const RunOptions& options);
 /// Prints the model as it is understood. \throws OutputError
 int sketch_command(const std::string& model);
 
+/// Lists the rolled sections whose names contain the pattern, all for an empty one. \throws OutputError
+int sections_command(const std::string& pattern);
+
 /// Writes a starter model to a file, or to the standard output where `file` is empty; never over an existing file.
 /// \throws OutputError
 int new_command(const std::string& kind, const std::string& file);

@@ -26,8 +26,8 @@ struct CommandLine {
                  "under load cases and combinations, from a model in a TOML file.",
                  "groundsill"};
     RunOptions run;
-    std::string report, only, sketch_model, kind, file;
-    CLI::App *run_app = nullptr, *sketch_app = nullptr, *new_app = nullptr;
+    std::string report, only, sketch_model, pattern, kind, file;
+    CLI::App *run_app = nullptr, *sketch_app = nullptr, *sections_app = nullptr, *new_app = nullptr;
 
     CommandLine() {
         app.require_subcommand(1);
@@ -49,6 +49,9 @@ struct CommandLine {
         sketch_app = app.add_subcommand("sketch", "Show a model as it is understood, without solving it");
         sketch_app->add_option("MODEL", sketch_model, "The model, a TOML file")->required();
 
+        sections_app = app.add_subcommand("sections", "List the rolled sections that a model can name");
+        sections_app->add_option("PATTERN", pattern, "A part of the names, such as \"IPE\" or \"W12\"");
+
         new_app = app.add_subcommand("new", "Write a commented model to start from");
         new_app->add_option("KIND", kind, "beam, portal or grade-beam")->required();
         new_app->add_option("FILE", file, "Where to write it; without it, to the standard output");
@@ -64,6 +67,7 @@ struct CommandLine {
             return run_command(run);
         }
         if (*sketch_app) return sketch_command(sketch_model);
+        if (*sections_app) return sections_command(pattern);
         return new_command(kind, file);
     }
 };

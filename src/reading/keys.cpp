@@ -55,7 +55,7 @@ constexpr Key rows[] = {
 
     {"sections", "*", table, {}, "", "section", "a cross-section"},
     {"section", "shape", word, {}, "rectangle|circle|pipe|box|i|tee|channel", "", "shape, given by its dimensions"},
-    {"section", "designation", text, {}, "", "", "rolled section of the built-in tables", later},
+    {"section", "designation", text, {}, "", "", "rolled section of the built-in tables, like \"IPE 300\""},
     {"section", "width", quantity | positive, dim::length, "", "", "width of a rectangle, box, i, tee or channel"},
     {"section", "depth", quantity | positive, dim::length, "", "", "depth, along the member's across axis"},
     {"section", "diameter", quantity | positive, dim::length, "", "", "outer diameter of a circle or pipe"},

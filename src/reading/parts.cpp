@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <fmt/format.h>
 
+#include "model/designations.hpp"
 #include "model/shapes.hpp"
 #include "reading/draft.hpp"
 
@@ -181,6 +182,16 @@ ShapeDimensions read_dimensions(Fields& fields, const ShapeKeys& shape, std::str
     return dimensions;
 }
 
+void take(const ShapeProperties& properties, const Fields& fields, Section& section) {
+    section.A = properties.A;
+    section.I = properties.I;
+    section.depth = properties.depth;
+    section.top = properties.top;
+    section.bottom = properties.bottom;
+    const Field* shear = fields.sound_field("shear");
+    if (shear != nullptr && shear->node().boolean()) section.shear_area = properties.shear_area;
+}
+
 void read_shape(Fields& fields, const Field& shape, Section& section) {
     const std::string_view name = shape.node().text();
     const auto found = std::find_if(shape_keys().begin(), shape_keys().end(),
@@ -190,13 +201,28 @@ void read_shape(Fields& fields, const Field& shape, Section& section) {
     std::string error;
     const std::optional<ShapeProperties> properties = section_of_shape(dimensions, error);
     if (!properties) return fields.error(shape, "is no section: " + error);
-    section.A = properties->A;
-    section.I = properties->I;
-    section.depth = properties->depth;
-    section.top = properties->top;
-    section.bottom = properties->bottom;
-    const Field* shear = fields.sound_field("shear");
-    if (shear != nullptr && shear->node().boolean()) section.shear_area = properties->shear_area;
+    take(*properties, fields, section);
+}
+
+/// Dimensions belong to shapes: a table's section and one given by its properties have none.
+void refuse_dimensions(Fields& fields, std::string_view advice) {
+    for (const std::string_view key : {"width", "diameter", "wall", "web", "flange", "root"})
+        if (const Field* field = fields.find(key)) fields.error(*field, fmt::format("gives {} {}", key, advice));
+}
+
+/// A rolled section of the built-in tables.
+void read_designation(Fields& fields, const Field& field, Section& section) {
+    refuse_dimensions(fields, "beside a designation, which has its own dimensions: take it out");
+    const std::string_view name = field.node().text();
+    const Designation* designation = find_designation(name);
+    if (designation == nullptr) {
+        const std::string nearest = fmt::format("{}", fmt::join(nearest_designations(name), ", "));
+        fields.error(field, fmt::format("names \"{}\", which is not in the tables{}{}; `groundsill sections` lists them", name,
+                                        nearest.empty() ? "" : ": did you mean ", nearest));
+        return;
+    }
+    section.description = designation->name;
+    take(section_of_designation(*designation), fields, section);
 }
 
 /// A section given by its properties alone; its centroid is taken at mid-depth.
@@ -205,13 +231,8 @@ void read_properties(Fields& fields, Section& section) {
     if (const Field* shear = fields.find("shear")) {
         fields.error(*shear, "has shear without a shape: give shear_area instead");
     }
-    for (const std::string_view key : {"width", "diameter", "wall", "web", "flange", "root"}) {
-        if (const Field* field = fields.find(key)) {
-            fields.error(*field,
-                         fmt::format("gives {} without a shape: add shape = \"...\", or take {} out", key, key));
-        }
-    }
-    const std::string_view advice = ": give the section a shape, or A and I";
+    refuse_dimensions(fields, "without a shape: add shape = \"...\", or take it out");
+    const std::string_view advice = ": give the section a shape, a designation, or A and I";
     fields.required_number("A", advice);
     fields.required_number("I", advice);
 }
@@ -232,9 +253,12 @@ Section read_section(Draft& draft, const NamedEntry& entry) {
     Fields fields(draft.context, key_group("section"), entry.path, entry.field.node(), entry.field.position());
     fields.at_most_one({"shape", "designation"});
     const Field* shape = fields.find("shape");
+    const Field* designation = fields.find("designation");
     if (shape != nullptr && shape->sound)
         read_shape(fields, *shape, section);
-    else if (shape == nullptr && fields.sound())
+    else if (designation != nullptr && designation->sound)
+        read_designation(fields, *designation, section);
+    else if (shape == nullptr && designation == nullptr && fields.sound())
         read_properties(fields, section);
     override_properties(fields, section);
     if (!fields.sound()) draft.mark_unsound(entry.field.position());

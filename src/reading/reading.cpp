@@ -51,7 +51,6 @@ void check_completeness(Draft& draft) {
         need(draft.nodes, "nodes ([nodes] or [beams])");
         need(draft.members, "members ([members] or [beams])");
     }
-    need(draft.supports, "supports ([supports])");
     need(draft.cases, "load cases ([cases.NAME])");
     if (!missing.empty()) draft.context.error({1, 1}, "the model is not complete: it has no " + missing);
 }

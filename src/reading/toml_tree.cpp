@@ -4,12 +4,13 @@
 #include <exception>
 
 #define TOML_ENABLE_FORMATTERS 0
-// Version 3.3 of the library states as an assertion what a file may well get wrong ("[.a]"): that would abort the program, or
-// with NDEBUG and clang be undefined behaviour. Behind each of these assertions stands the proper error.
+// Version 3.3 of the library states as an assertion what a file may well get wrong ("[.a]"): that would abort the
+// program, or with NDEBUG and clang be undefined behaviour. Behind each of these assertions stands the proper error.
 #undef NDEBUG
 #define TOML_ASSERT(expression) static_cast<void>(0)
 #include <toml++/impl/preprocessor.h>
-// It also calls a branch unreachable that letters like µ reach, in functions that answer whether a character is of some kind.
+// It also calls a branch unreachable that letters like µ reach, in functions that answer whether a character is of some
+// kind.
 #pragma push_macro("TOML_UNREACHABLE")
 #undef TOML_UNREACHABLE
 #define TOML_UNREACHABLE return false

@@ -41,9 +41,9 @@ I = 0.0054
                        k + 1);
     text += "[supports]\nN0 = { x = \"fixed\", y = 20000 }\n";
     for (int k = 1; k <= spans; ++k) fmt::format_to(out, "N{} = {{ y = 20000 }}\n", k);
-    text += "[cases.dead]\nloads = [\n";
-    for (int k = 0; k < spans; ++k) fmt::format_to(out, "{{ member = \"M{}\", y = -12 }},\n", k);
-    text += "]\n";
+    text += "[cases.dead]\nloads = [{ y = -12, members = [\n";
+    for (int k = 0; k < spans; ++k) fmt::format_to(out, "\"M{}\",{}", k, k % 10 == 9 ? '\n' : ' ');
+    text += "] }]\n";
     return text;
 }
 

@@ -196,6 +196,17 @@ TEST_CASE("a section by its properties has its centroid at mid-depth") {
     CHECK_FALSE(bare.top);
 }
 
+TEST_CASE("rolled sections come from the tables") {
+    const groundsill::ReadResult result = groundsill::read_model(test::with("sections", "[sections.bar]\ndesignation = 'ipe300'\nshear = true\nI = '1e-4 m4'"));
+    REQUIRE(result.model);
+    const Section& bar = result.model->sections[0];
+    CHECK(bar.description == "IPE 300");
+    CHECK(bar.A == doctest::Approx(53.812e-4).epsilon(1e-4)); // EN 10365, from the nominal dimensions
+    CHECK(bar.I == 1e-4);                                     // a given property overrides the table's
+    CHECK(*bar.depth == 0.3);
+    CHECK(*bar.shear_area == doctest::Approx(0.3 * 0.0071));
+}
+
 TEST_CASE("sections that are refused") {
     const auto section = [](std::string_view keys) { return says("sections", "[sections.bar]\n" + std::string(keys)); };
     CHECK(section("shape = 'rectangle'\nwidth = '1 m'") ==
@@ -208,9 +219,15 @@ TEST_CASE("sections that are refused") {
           "2:1: error: sections.bar.shape takes \"rectangle\", \"circle\", \"pipe\", \"box\", \"i\", \"tee\", "
           "\"channel\": "
           "'rectangel' is none of them; the nearest word is \"rectangle\"\n");
-    CHECK(section("A = '1 m2'") == "1:11: error: sections.bar lacks 'I': give the section a shape, or A and I\n");
+    CHECK(section("A = '1 m2'") == "1:11: error: sections.bar lacks 'I': give the section a shape, a designation, or A and I\n");
     CHECK(section("A = '1 m2'\nI = '1 m4'\nwidth = '1 m'") ==
-          "4:1: error: sections.bar gives width without a shape: add shape = \"...\", or take width out\n");
+          "4:1: error: sections.bar gives width without a shape: add shape = \"...\", or take it out\n");
+    CHECK(section("designation = 'IPE 310'") ==
+          "2:1: error: sections.bar names \"IPE 310\", which is not in the tables: did you mean IPE 300, IPE 330, "
+          "IPE 270; `groundsill sections` lists them\n");
+    CHECK(section("designation = 'IPE 300'\nroot = '1 mm'") ==
+          "3:1: error: sections.bar gives root beside a designation, which has its own dimensions: take it out\n");
+    CHECK(section("designation = 'IPE 300'\nshape = 'i'") == test::Contains{"designation"});
     CHECK(section("A = '1 m2'\nI = '1 m4'\nshear = true") ==
           "4:1: error: sections.bar has shear without a shape: give shear_area instead\n");
     CHECK(section("shape = 'pipe'\ndiameter = '100 mm'\nwall = '60 mm'") ==
