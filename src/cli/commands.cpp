@@ -4,6 +4,8 @@
 #include <cstdlib>
 #include <cstring>
 #include <fstream>
+#include <functional>
+#include <future>
 #include <optional>
 #include <vector>
 
@@ -105,8 +107,12 @@ int run_command(const RunOptions& options) {
     }
     for (const std::string& warning : outcome.analysis->warnings)
         complain(fmt::format("{}: warning: {}", options.model, warning));
+    // the summary looks through all diagrams, and so do the files: both at once
+    std::future<std::string> summary;
+    if (options.json != "-")
+        summary = std::async(std::launch::async, summary_text, std::cref(*outcome.analysis), colour_for(STDOUT_FILENO));
     write_outputs(*outcome.analysis, options, json);
-    if (options.json != "-") standard_output()(summary_text(*outcome.analysis, colour_for(STDOUT_FILENO)));
+    if (summary.valid()) standard_output()(summary.get());
     finish_standard_output();
     return exit_ok;
 }

@@ -82,8 +82,8 @@ std::vector<double> read_starts(Fields& fields) {
     }
     const auto node_count = static_cast<std::size_t>(nodes->node().size());
     if (node_count >= 2 && spans->size() + 1 != node_count) {
-        fields.error(*field, fmt::format("has {} spans between {} nodes: give one span fewer than nodes", spans->size(),
-                                         node_count));
+        fields.error(*field, fmt::format("has {} {} between {} nodes: give one span fewer than nodes", spans->size(),
+                                         spans->size() == 1 ? "span" : "spans", node_count));
         return {};
     }
     std::vector<double> starts{0};

@@ -242,7 +242,9 @@ Field read_field(Context& context, const Key& key, const Path& path, const Entry
 std::optional<std::array<Measure, 2>> read_pair(Context& context, const Path& path, const Field& field) {
     ValueReader reader(context, *field.key, path, field.entry);
     if (field.node().size() != 2) {
-        reader.fail(fmt::format("takes {}: {} values are given", expectation(*field.key), field.node().size()));
+        const int size = field.node().size();
+        reader.fail(
+            fmt::format("takes {}: {} {} given", expectation(*field.key), size, size == 1 ? "value is" : "values are"));
         return {};
     }
     std::array<Measure, 2> values;

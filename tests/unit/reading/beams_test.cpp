@@ -105,7 +105,7 @@ TEST_CASE("releases and hinges of a beam") {
 
 TEST_CASE("beams that are refused") {
     CHECK(says(beam_with("spans = ['6 m']")) ==
-          "5:1: error: beams.floor has 1 spans between 3 nodes: give one span fewer than nodes\n");
+          "5:1: error: beams.floor has 1 span between 3 nodes: give one span fewer than nodes\n");
     CHECK(says(beam_with("spans = ['6 m', '-8 m']")) == "5:1: error: beams.floor.spans must be above 0\n");
     CHECK(says(beam_with("spans = '6 m'")) ==
           "5:1: error: beams.floor.spans takes an array, each a length, like \"12 m\": a text is given\n");

@@ -91,7 +91,7 @@ TEST_CASE("nodes that are refused") {
           "2:1: error: nodes.A has no unit: write a length, as in \"0 m\", or name the units of bare "
           "numbers in [units]\n");
     CHECK(node("A = ['0 m']") ==
-          "2:1: error: nodes.A takes an array of two, each a length, like \"12 m\": 1 values are given\n");
+          "2:1: error: nodes.A takes an array of two, each a length, like \"12 m\": 1 value is given\n");
     CHECK(node("A = ['0 m', '50 %']") == "2:1: error: nodes.A does not fit: expected a length, got a fraction\n");
     CHECK(node("A = '0 m'") ==
           "2:1: error: nodes.A takes an array of two, each a length, like \"12 m\": a text is given\n");

@@ -255,7 +255,7 @@ TEST_CASE("loads that are refused") {
     CHECK(says_of_load("{ member = 'AB', y = ['-1 kN/m'] }") ==
           "2:27: error: cases.c.loads[0].y takes a force per length, like \"12 kN/m\", or an array of two, each a "
           "force per "
-          "length, like \"12 kN/m\": 1 values are given\n");
+          "length, like \"12 kN/m\": 1 value is given\n");
     CHECK(says_of_load("{ members = [], y = '-1 kN/m' }") ==
           "2:12: error: cases.c.loads[0] lists no members: name at least one\n");
     CHECK(says_of_load("{ members = ['AB', 'AB'], y = '-1 kN/m' }") ==

@@ -197,7 +197,8 @@ TEST_CASE("a section by its properties has its centroid at mid-depth") {
 }
 
 TEST_CASE("rolled sections come from the tables") {
-    const groundsill::ReadResult result = groundsill::read_model(test::with("sections", "[sections.bar]\ndesignation = 'ipe300'\nshear = true\nI = '1e-4 m4'"));
+    const groundsill::ReadResult result = groundsill::read_model(
+        test::with("sections", "[sections.bar]\ndesignation = 'ipe300'\nshear = true\nI = '1e-4 m4'"));
     REQUIRE(result.model);
     const Section& bar = result.model->sections[0];
     CHECK(bar.description == "IPE 300");
@@ -219,7 +220,8 @@ TEST_CASE("sections that are refused") {
           "2:1: error: sections.bar.shape takes \"rectangle\", \"circle\", \"pipe\", \"box\", \"i\", \"tee\", "
           "\"channel\": "
           "'rectangel' is none of them; the nearest word is \"rectangle\"\n");
-    CHECK(section("A = '1 m2'") == "1:11: error: sections.bar lacks 'I': give the section a shape, a designation, or A and I\n");
+    CHECK(section("A = '1 m2'") ==
+          "1:11: error: sections.bar lacks 'I': give the section a shape, a designation, or A and I\n");
     CHECK(section("A = '1 m2'\nI = '1 m4'\nwidth = '1 m'") ==
           "4:1: error: sections.bar gives width without a shape: add shape = \"...\", or take it out\n");
     CHECK(section("designation = 'IPE 310'") ==
