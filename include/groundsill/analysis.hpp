@@ -1,8 +1,9 @@
 #pragma once
 // From a model to its responses.
 //
-// Theory: small displacements, linear elasticity, plane frames of straight prismatic members (Euler-Bernoulli, or Timoshenko
-// where the section gives a shear area). Every case is solved on one factorisation; combinations are superposed.
+// Theory: small displacements, linear elasticity, plane frames of straight prismatic members (Euler-Bernoulli, or
+// Timoshenko where the section gives a shear area). Every case is solved on one factorisation; combinations are
+// superposed.
 
 #include <memory>
 #include <optional>
@@ -11,6 +12,7 @@
 
 #include "groundsill/diagram.hpp"
 #include "groundsill/model.hpp"
+#include "groundsill/vibration.hpp"
 
 namespace groundsill {
 
@@ -18,7 +20,8 @@ namespace groundsill {
 struct NodeMovement {
     double x = 0;
     double y = 0;
-    std::optional<double> rotation; ///< absent where every member is released in moment and no support holds the rotation
+    std::optional<double>
+        rotation; ///< absent where every member is released in moment and no support holds the rotation
 };
 
 /// Force of a support on the structure, global axes, N and N m.
@@ -28,8 +31,8 @@ struct Reaction {
     double moment = 0;
 };
 
-/// What one segment of a member (the part between two hinges, mostly the whole member) carries and how its ends move: all
-/// that its diagrams need besides the loads.
+/// What one segment of a member (the part between two hinges, mostly the whole member) carries and how its ends move:
+/// all that its diagrams need besides the loads.
 struct SegmentState {
     double N = 0;        ///< axial force that the node passes to the start, N (loads at the very start come after it)
     double V = 0;        ///< shear force there, N
@@ -92,6 +95,7 @@ struct Analysis {
     std::vector<Response> combinations; ///< by combination
     std::optional<Envelope> strength;   ///< absent where the model has no such combination
     std::optional<Envelope> service;
+    std::optional<Vibration> vibration; ///< present where the model asks for it
     Verification verification;
     std::vector<std::string> warnings;
 };

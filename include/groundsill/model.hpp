@@ -1,9 +1,9 @@
 #pragma once
 // The model: plain data in SI (m, N, N m, rad, kg, K), in the order of the model file.
 //
-// Axes: global x to the right, y up, rotation counter-clockwise. A member's `along` axis runs from its first node to its
-// second, `across` is 90 degrees counter-clockwise from it. Entries refer to each other by index into the model's lists:
-// names are resolved once, while reading, where an unknown name can still be reported with its line.
+// Axes: global x to the right, y up, rotation counter-clockwise. A member's `along` axis runs from its first node to
+// its second, `across` is 90 degrees counter-clockwise from it. Entries refer to each other by index into the model's
+// lists: names are resolved once, while reading, where an unknown name can still be reported with its line.
 
 #include <limits>
 #include <optional>
@@ -19,11 +19,11 @@ inline constexpr double standard_gravity = 9.80665;
 
 struct Material {
     std::string name;
-    double E = 0;                              ///< Young's modulus, Pa
-    std::optional<double> G;                   ///< shear modulus, Pa; given or E/(2(1 + poisson))
-    std::optional<double> density;             ///< kg/m3; a given weight is divided by g
-    std::optional<double> expansion;           ///< thermal expansion, 1/K
-    std::optional<double> tension_strength;    ///< Pa, positive
+    double E = 0;                               ///< Young's modulus, Pa
+    std::optional<double> G;                    ///< shear modulus, Pa; given or E/(2(1 + poisson))
+    std::optional<double> density;              ///< kg/m3; a given weight is divided by g
+    std::optional<double> expansion;            ///< thermal expansion, 1/K
+    std::optional<double> tension_strength;     ///< Pa, positive
     std::optional<double> compression_strength; ///< Pa, positive
     Position position;
 };
@@ -74,8 +74,8 @@ struct Member {
     int material = -1;
     Release start;
     Release end;
-    double stiffness_factor = 1;  ///< times E A, E I and shear stiffness
-    std::vector<double> hinges;   ///< moment hinges inside, distances from the start in rising order, m
+    double stiffness_factor = 1; ///< times E A, E I and shear stiffness
+    std::vector<double> hinges;  ///< moment hinges inside, distances from the start in rising order, m
     Position position;
 };
 
@@ -144,13 +144,13 @@ struct SupportMovement {
 struct LoadCase {
     std::string name;
     Action action = Action::none;
-    std::string category; ///< of EN 1990, empty when none is given
-    std::string group;    ///< empty when none is given
-    int with = -1;        ///< index of the case that this one acts together with
-    int entries = 0;      ///< how many entries its `loads` has
+    std::string category;                  ///< of EN 1990, empty when none is given
+    std::string group;                     ///< empty when none is given
+    int with = -1;                         ///< index of the case that this one acts together with
+    int entries = 0;                       ///< how many entries its `loads` has
     std::vector<Position> entry_positions; ///< of each of these entries; empty for a model made in code
-    double self_weight = 0; ///< factor on the weight of every member, acting along -y
-    std::vector<MemberLoad> member_loads; ///< without the self-weight
+    double self_weight = 0;                ///< factor on the weight of every member, acting along -y
+    std::vector<MemberLoad> member_loads;  ///< without the self-weight
     std::vector<NodeLoad> node_loads;
     std::vector<SupportMovement> movements;
     Position position;
@@ -207,8 +207,8 @@ struct Model {
     std::optional<MassModel> mass; ///< present: natural frequencies are asked for
 };
 
-/// Checks of a model that need no file: lengths, stiffnesses, loads that lie on their members, properties that a load needs
-/// (density for self-weight, expansion and depth for temperatures), angles at which supports cannot take a load.
+/// Checks of a model that need no file: lengths, stiffnesses, loads that lie on their members, properties that a load
+/// needs (density for self-weight, expansion and depth for temperatures), angles at which supports cannot take a load.
 /// Indices must be valid. The findings come in the order of the model's lists.
 Diagnostics check_model(const Model& model);
 

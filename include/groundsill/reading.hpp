@@ -20,11 +20,9 @@ struct ReadResult {
 /// All errors of the model are found in one call; of TOML syntax, the first. Never throws for bad text.
 ReadResult read_model(std::string_view text);
 
-/// Writes diagnostics for a terminal: `file:line:column: error: message`, the line of the text (cut when long) and a mark
-/// under the column.
-/// \param file name to print before each place
-/// \param text the model's text, from which the lines are quoted
-/// \param colour emphasis by terminal control sequences
+/// Writes diagnostics for a terminal: `file:line:column: error: message`, the line of the text (cut when long) and a
+/// mark under the column. \param file name to print before each place \param text the model's text, from which the
+/// lines are quoted \param colour emphasis by terminal control sequences
 std::string describe(const Diagnostics& diagnostics, std::string_view file, std::string_view text, bool colour);
 
 } // namespace groundsill

@@ -35,13 +35,14 @@ struct Mode {
     double effective_y = 0; ///< and along y
     std::vector<Share> flexibility; ///< every member, then every support with springs
     Place largest;
-    std::vector<NodeShape> nodes;  ///< by node
-    std::vector<Diagram> members;  ///< by member; of the diagrams only `along` and `across` mean something
+    std::vector<NodeShape> nodes; ///< by node
+    std::vector<Diagram> members; ///< by member; of the diagrams only `along` and `across` mean something
 };
 
 struct Vibration {
     std::vector<Mode> modes; ///< rising frequencies
-    int modes_missed = 0;    ///< eigenvalues below the last mode's, by Sylvester's law of inertia, less those that were found
+    int modes_missed =
+        0; ///< eigenvalues below the last mode's, by Sylvester's law of inertia, less those that were found
     std::vector<std::string> warnings;
 };
 

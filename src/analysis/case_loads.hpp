@@ -13,14 +13,16 @@ class CaseLoads {
     explicit CaseLoads(const Model& model);
 
     /// Adds `factor` times what a case puts on a segment, self-weight included.
-    void add(const Structure& structure, int load_case, Real factor, const Segment& segment, elements::SegmentLoads& loads) const;
+    void add(const Structure& structure, int load_case, Real factor, const Segment& segment,
+             elements::SegmentLoads& loads) const;
 
     /// True when the case loads any member.
     bool loads_members(int load_case) const;
 
   private:
     struct ByMember {
-        std::vector<int> start; ///< by member into `order`, one more at the end; empty where the case has no member loads
+        std::vector<int>
+            start; ///< by member into `order`, one more at the end; empty where the case has no member loads
         std::vector<int> order; ///< indices into LoadCase::member_loads
     };
 

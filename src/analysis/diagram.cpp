@@ -20,7 +20,8 @@ DiagramPlace place_on(const DiagramPiece& piece, double s) {
             clean_value_of(piece.across, t)};
 }
 
-/// The places at which a function can have its extremes are offered from left to right; the first of equal ones is kept.
+/// The places at which a function can have its extremes are offered from left to right; the first of equal ones is
+/// kept.
 struct Search {
     DiagramRange range;
     double tolerance = 0;
@@ -37,7 +38,8 @@ struct Search {
         const double span = piece.to - piece.from;
         offer(function[0], piece.from);
         const auto turns = roots_inside(derivative_of(function), span);
-        for (std::size_t k = 0; k < turns.count; ++k) offer(clean_value_of(function, turns.values[k]), piece.from + turns.values[k]);
+        for (std::size_t k = 0; k < turns.count; ++k)
+            offer(clean_value_of(function, turns.values[k]), piece.from + turns.values[k]);
         offer(clean_value_of(function, span), piece.to);
     }
 };
@@ -87,10 +89,18 @@ DiagramRange Diagram::extremes(Curve curve, double tolerance) const {
     search.tolerance = tolerance;
     for (const DiagramPiece& piece : pieces) {
         switch (curve) {
-        case Curve::N: search.offer(piece.N, piece); break;
-        case Curve::V: search.offer(piece.V, piece); break;
-        case Curve::M: search.offer(piece.M, piece); break;
-        case Curve::across: search.offer(piece.across, piece); break;
+        case Curve::N:
+            search.offer(piece.N, piece);
+            break;
+        case Curve::V:
+            search.offer(piece.V, piece);
+            break;
+        case Curve::M:
+            search.offer(piece.M, piece);
+            break;
+        case Curve::across:
+            search.offer(piece.across, piece);
+            break;
         }
     }
     return search.range;

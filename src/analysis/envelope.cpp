@@ -47,19 +47,18 @@ void offer_member(const Diagram& diagram, int combination, Envelope::OfMember& k
 
 std::optional<Envelope> envelope(const Analysis& analysis, LimitState limit) {
     const Model& model = *analysis.model;
+    const auto counts = [&](const Combination& combination) { return combination.limit == limit; };
+    if (std::none_of(model.combinations.begin(), model.combinations.end(), counts)) return std::nullopt;
     Envelope result;
     result.reactions.resize(model.supports.size());
     result.members.resize(model.members.size());
-    bool any = false;
     for (int k = 0; k < static_cast<int>(model.combinations.size()); ++k) {
-        if (model.combinations[k].limit != limit) continue;
-        any = true;
+        if (!counts(model.combinations[k])) continue;
         for (std::size_t s = 0; s < result.reactions.size(); ++s)
             offer_reaction(analysis.combinations[k].reactions[s], k, result.reactions[s]);
         for (int m = 0; m < static_cast<int>(result.members.size()); ++m)
             offer_member(combination_diagram(analysis, k, m), k, result.members[m]);
     }
-    if (!any) return std::nullopt;
     return result;
 }
 

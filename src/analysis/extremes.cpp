@@ -160,12 +160,10 @@ bool cannot_change(const LeastMost<Peak>& peaks, double largest) {
 }
 
 /// Searches one diagram, unless its bound tells that nothing larger can be in it.
-void search(LeastMost<Peak>& peaks, const Diagram& diagram, Curve curve, const RoundOff& rounding,
-            const Place& place) {
+void search(LeastMost<Peak>& peaks, const Diagram& diagram, Curve curve, const RoundOff& rounding, const Place& place) {
     const double largest = bound(diagram, curve);
     if (cannot_change(peaks, largest)) return;
-    offer(peaks, range_below(diagram, curve, rounding, largest), place,
-          own_rounding(curve, rounding, diagram.length));
+    offer(peaks, range_below(diagram, curve, rounding, largest), place, own_rounding(curve, rounding, diagram.length));
 }
 
 void search_forces(Peaks& peaks, const Diagram& diagram, const RoundOff& rounding, const Place& place) {

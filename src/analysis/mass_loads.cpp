@@ -17,8 +17,10 @@ void add_positive(elements::MassLine line, std::vector<elements::MassLine>& line
     if (line.ma <= 0 && line.mb <= 0) return;
     if (line.ma < 0 || line.mb < 0) {
         const Real zero = line.a + (line.b - line.a) * line.ma / (line.ma - line.mb);
-        if (line.ma < 0) line = {zero, line.b, 0, line.mb};
-        else line = {line.a, zero, line.ma, 0};
+        if (line.ma < 0)
+            line = {zero, line.b, 0, line.mb};
+        else
+            line = {line.a, zero, line.ma, 0};
     }
     lines.push_back(line);
 }
@@ -35,14 +37,16 @@ SegmentLoadMass mass_of_segment(const Internals& internals, const MassModel& mas
         acting.clear();
         internals.loads.add(structure, term.load_case, term.factor, segment, acting);
         for (const elements::LineLoad& line : acting.lines)
-            add_positive({line.a, line.b, downward(segment, line.pa, line.qa), downward(segment, line.pb, line.qb)}, result.spread.lines);
+            add_positive({line.a, line.b, downward(segment, line.pa, line.qa), downward(segment, line.pb, line.qb)},
+                         result.spread.lines);
         for (const elements::PointLoad& point : acting.points) {
             const Real kilograms = downward(segment, point.P, point.Q);
             if (kilograms > 0) result.points.push_back({point.a, kilograms});
         }
         const Real weight = term.factor * structure.model->cases[term.load_case].self_weight;
         if (section.shear_area && weight > 0)
-            result.spread.rotary += weight * structure.model->materials[member.material].density.value_or(0) * section.I;
+            result.spread.rotary +=
+                weight * structure.model->materials[member.material].density.value_or(0) * section.I;
     }
     return result;
 }

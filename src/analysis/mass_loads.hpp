@@ -20,8 +20,8 @@ struct SegmentLoadMass {
     std::vector<PointMass> points;
 };
 
-/// Mass of a segment from the listed cases: the downward (global -y) part of their loads over g, where it acts. Couples and
-/// upward parts give none. Only the self-weight of shear-flexible members brings rotary inertia, ρ I.
+/// Mass of a segment from the listed cases: the downward (global -y) part of their loads over g, where it acts. Couples
+/// and upward parts give none. Only the self-weight of shear-flexible members brings rotary inertia, ρ I.
 SegmentLoadMass mass_of_segment(const Internals& internals, const MassModel& mass, const Segment& segment);
 
 /// Mass on nodes, by node of the structure: from node loads of the listed cases, and given as such; kg.

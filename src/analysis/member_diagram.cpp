@@ -17,7 +17,8 @@ Diagram make_diagram(const Internals& internals, const Terms& terms, const Respo
     for (int k = structure.first_segment[member]; k < structure.first_segment[member + 1]; ++k) {
         const Segment& segment = structure.segments[k];
         acting.clear();
-        for (const Combination::Term& term : terms) internals.loads.add(structure, term.load_case, term.factor, segment, acting);
+        for (const Combination::Term& term : terms)
+            internals.loads.add(structure, term.load_case, term.factor, segment, acting);
         const SegmentState& s = response.segments[k];
         elements::cut(acting, segment.frame.length, loading);
         elements::append_diagram(segment.frame, loading, {s.N, s.V, s.M, s.along, s.across, s.rotation},
@@ -35,8 +36,8 @@ Diagram case_diagram(const Analysis& analysis, int load_case, int member) {
 }
 
 Diagram combination_diagram(const Analysis& analysis, int combination, int member) {
-    return make_diagram(*analysis.internals, analysis.model->combinations[combination].terms, analysis.combinations[combination],
-                        member);
+    return make_diagram(*analysis.internals, analysis.model->combinations[combination].terms,
+                        analysis.combinations[combination], member);
 }
 
 } // namespace groundsill

@@ -40,8 +40,8 @@ template <std::size_t Most> struct Roots {
     }
 };
 
-/// The root between a and b, where the polynomial changes its sign once: Newton's steps, halving where one leaves the bracket,
-/// until the bracket or the step is at the last bits.
+/// The root between a and b, where the polynomial changes its sign once: Newton's steps, halving where one leaves the
+/// bracket, until the bracket or the step is at the last bits.
 template <std::size_t Size> double root_between(const std::array<double, Size>& c, double a, double b) {
     const auto slope = derivative_of(c);
     const bool rising = value_of(c, a) < 0;
@@ -71,8 +71,10 @@ template <std::size_t Size> Roots<Size - 1> roots_inside(const std::array<double
         for (std::size_t k = 0; k <= turns.count; ++k) {
             const double to = k < turns.count ? turns.values[k] : end;
             const double at_from = value_of(c, from), at_to = value_of(c, to);
-            if ((at_from < 0 && at_to > 0) || (at_from > 0 && at_to < 0)) roots.add(root_between(c, from, to));
-            else if (at_to == 0 && k < turns.count) roots.add(to);
+            if ((at_from < 0 && at_to > 0) || (at_from > 0 && at_to < 0))
+                roots.add(root_between(c, from, to));
+            else if (at_to == 0 && k < turns.count)
+                roots.add(to);
             from = to;
         }
     }

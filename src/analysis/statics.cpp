@@ -2,12 +2,15 @@
 
 #include <algorithm>
 #include <cmath>
+#include <iterator>
+#include <stdexcept>
 
 #include <fmt/format.h>
 
 #include "analysis/case_loads.hpp"
 #include "analysis/envelope.hpp"
 #include "analysis/verification.hpp"
+#include "analysis/vibration.hpp"
 #include "groundsill/analysis.hpp"
 #include "system/mechanism.hpp"
 
@@ -99,8 +102,9 @@ NodeMovement movement_of(const Structure& structure, int node, const Movements& 
 
 /// \param acting, loading room to work in
 /// \param noise size of forces that are round-off
-SegmentState state_of(const Internals& internals, int load_case, const Segment& segment, const elements::FixedEnd* fixed,
-                      const Movements& u, Real noise, elements::SegmentLoads& acting, elements::Loading& loading) {
+SegmentState state_of(const Internals& internals, int load_case, const Segment& segment,
+                      const elements::FixedEnd* fixed, const Movements& u, Real noise, elements::SegmentLoads& acting,
+                      elements::Loading& loading) {
     const Structure& structure = internals.structure;
     const EndForces f = end_forces(basic_forces(structure, segment, u), fixed);
     acting.clear();
@@ -136,7 +140,8 @@ Response respond(const Internals& internals, int load_case, const LoadVector& lo
     elements::Loading loading;
     for (std::size_t k = 0; k < structure.segments.size(); ++k)
         response.segments.push_back(state_of(internals, load_case, structure.segments[k],
-                                             loads.fixed.empty() ? nullptr : &loads.fixed[k], u, noise, acting, loading));
+                                             loads.fixed.empty() ? nullptr : &loads.fixed[k], u, noise, acting,
+                                             loading));
     return response;
 }
 
@@ -159,7 +164,8 @@ void add_scaled(const Response& from, double factor, Response& to) {
     for (std::size_t k = 0; k < from.movements.size(); ++k) {
         to.movements[k].x += factor * from.movements[k].x;
         to.movements[k].y += factor * from.movements[k].y;
-        if (from.movements[k].rotation) to.movements[k].rotation = to.movements[k].rotation.value_or(0) + factor * *from.movements[k].rotation;
+        if (from.movements[k].rotation)
+            to.movements[k].rotation = to.movements[k].rotation.value_or(0) + factor * *from.movements[k].rotation;
     }
     for (std::size_t k = 0; k < from.reactions.size(); ++k) {
         to.reactions[k].x += factor * from.reactions[k].x;
@@ -194,10 +200,11 @@ std::string describe_lost_moment(const Structure& structure) {
     for (const LoadCase& load_case : structure.model->cases)
         for (const NodeLoad& load : load_case.node_loads)
             if (load.moment != 0 && !structure.has_rotation[load.node])
-                return fmt::format("the structure is a mechanism: the moment of case {} at node {} turns it freely. What lets it: "
-                                   "every member there is released in moment and no support holds the rotation. Put the "
-                                   "moment on a member, or take one release away.",
-                                   load_case.name, node_name(structure, load.node));
+                return fmt::format(
+                    "the structure is a mechanism: the moment of case {} at node {} turns it freely. What lets it: "
+                    "every member there is released in moment and no support holds the rotation. Put the "
+                    "moment on a member, or take one release away.",
+                    load_case.name, node_name(structure, load.node));
     return {};
 }
 
@@ -208,19 +215,22 @@ std::string describe_all(const Structure& structure, const std::vector<Shape>& m
         if (k > 0) text += '\n';
         text += describe_mechanism(structure, mechanisms[k]);
     }
-    if (mechanisms.size() > most_told) text += fmt::format("\nand {} more ways to move.", mechanisms.size() - most_told);
+    if (mechanisms.size() > most_told)
+        text += fmt::format("\nand {} more ways to move.", mechanisms.size() - most_told);
     return text;
 }
 
 void warn(Analysis& analysis) {
     if (analysis.verification.residual > 1e-9)
-        analysis.warnings.push_back(fmt::format("the residual of {:.1e} is larger than round-off: stiffnesses differ so much that "
-                                                "small forces may be wrong; check members and springs for slips of units.",
-                                                analysis.verification.residual));
+        analysis.warnings.push_back(
+            fmt::format("the residual of {:.1e} is larger than round-off: stiffnesses differ so much that "
+                        "small forces may be wrong; check members and springs for slips of units.",
+                        analysis.verification.residual));
     if (analysis.verification.condition > 1e13)
-        analysis.warnings.push_back(fmt::format("the stiffness is badly conditioned ({:.1e}): the structure is close to a "
-                                                "mechanism; check for nearly free directions.",
-                                                analysis.verification.condition));
+        analysis.warnings.push_back(
+            fmt::format("the stiffness is badly conditioned ({:.1e}): the structure is close to a "
+                        "mechanism; check for nearly free directions.",
+                        analysis.verification.condition));
 }
 
 } // namespace
@@ -251,6 +261,15 @@ Outcome analyse(const Model& model) {
     analysis.strength = envelope(analysis, LimitState::strength);
     analysis.service = envelope(analysis, LimitState::service);
     warn(analysis);
+    if (model.mass) {
+        try {
+            analysis.vibration = find_modes(*internals, *model.mass, false);
+        } catch (const std::runtime_error& error) {
+            outcome.refusal.message = error.what();
+            return outcome;
+        }
+        std::ranges::copy(analysis.vibration->warnings, std::back_inserter(analysis.warnings));
+    }
     outcome.analysis = std::move(analysis);
     return outcome;
 }

@@ -14,8 +14,9 @@ namespace groundsill {
 
 namespace {
 
-/// Longest part of a segment, in lengths 1/β of its bending wave: cubic shapes err by (βh)⁴/1440 in frequency, here 6e-6.
-constexpr double wave = 0.3;
+/// Longest part of a segment, in lengths 1/β of its bending wave: cubic shapes err by (βh)⁴/1440 in frequency, here
+/// 1e-6.
+constexpr double wave = 0.2;
 
 /// Every loaded segment has at least so many parts: its shape between the nodes must be seen even where it is stiff.
 constexpr int fewest_parts = 2;
@@ -62,8 +63,10 @@ elements::SegmentMass part_of(const elements::SegmentMass& whole, Real from, Rea
     return part;
 }
 
-/// Adds what a movement of all nodes by 1 along x and y puts on the active directions: M 1, with the fixed directions moving too.
-void add_pull(const Structure& structure, const Segment& part, const elements::EndMatrix& M, VibratingStructure& result) {
+/// Adds what a movement of all nodes by 1 along x and y puts on the active directions: M 1, with the fixed directions
+/// moving too.
+void add_pull(const Structure& structure, const Segment& part, const elements::EndMatrix& M,
+              VibratingStructure& result) {
     const double c = static_cast<double>(part.frame.cosine), s = static_cast<double>(part.frame.sine);
     for (int axis = 0; axis < 2; ++axis) {
         const double along = axis == 0 ? c : s, across = axis == 0 ? -s : c;
@@ -148,8 +151,8 @@ std::vector<Diagram> member_shapes(const Structure& fine, const Movements& u) {
     for (const Segment& part : fine.segments) {
         elements::Loading loading = none;
         loading.pieces[0].to = part.frame.length;
-        const elements::State start =
-            elements::start_of_shape(part.frame, part.stiffness, end_state(fine, part, false, u), end_state(fine, part, true, u));
+        const elements::State start = elements::start_of_shape(
+            part.frame, part.stiffness, end_state(fine, part, false, u), end_state(fine, part, true, u));
         Diagram& shape = shapes[part.member];
         elements::append_diagram(part.frame, loading, start, static_cast<double>(part.offset), shape.pieces);
         shape.length = static_cast<double>(part.offset + part.frame.length);
@@ -186,7 +189,8 @@ std::vector<Mode::Share> flexibility_shares(const Structure& fine, const Movemen
         const Support& support = model.supports[s];
         if (!support.x.is_elastic() && !support.y.is_elastic() && !support.rotation.is_elastic()) continue;
         Real energy = 0;
-        for (int d = 3 * support.node; d < 3 * support.node + 3; ++d) energy += fine.spring[d] * u.value(d) * u.value(d);
+        for (int d = 3 * support.node; d < 3 * support.node + 3; ++d)
+            energy += fine.spring[d] * u.value(d) * u.value(d);
         shares.push_back({.support = s, .share = static_cast<double>(energy)});
         total += energy;
     }
@@ -290,12 +294,15 @@ Vibration find_modes(const Internals& internals, const MassModel& mass, bool is_
     result.modes_missed = pairs.missed;
     const double largest = pairs.values.empty() ? 0 : std::abs(pairs.values.back());
     for (std::size_t k = 0; k < pairs.values.size(); ++k)
-        result.modes.push_back(make_mode(vibrating, pairs.values[k], pairs.vectors[k], is_free && pairs.values[k] < 1e-7 * largest));
+        result.modes.push_back(
+            make_mode(vibrating, pairs.values[k], pairs.vectors[k], is_free && pairs.values[k] < 1e-7 * largest));
     if (pairs.exhausted)
-        result.warnings.push_back(fmt::format("[mass] asks for {} modes, but the mass allows only {} with a finite frequency",
-                                              mass.modes, pairs.values.size()));
+        result.warnings.push_back(
+            fmt::format("[mass] asks for {} modes, but the mass allows only {} with a finite frequency", mass.modes,
+                        pairs.values.size()));
     if (pairs.missed > 0)
-        result.warnings.push_back(fmt::format("{} natural frequencies below the last one listed were not found", pairs.missed));
+        result.warnings.push_back(
+            fmt::format("{} natural frequencies below the last one listed were not found", pairs.missed));
     return result;
 }
 

@@ -12,11 +12,12 @@ struct VibratingStructure {
     Subdivided fine;
     BlockMatrix stiffness;
     BlockMatrix mass;
-    std::vector<double> pull_x, pull_y; ///< M 1 for ground movements along x and y, by direction: fixed directions move too
+    std::vector<double> pull_x,
+        pull_y; ///< M 1 for ground movements along x and y, by direction: fixed directions move too
 };
 
-/// Cuts every segment at its point masses and into parts no longer than `wave` times the length 1/β of a bending wave of the
-/// given circular frequency, β = (m ω²/(E I))^¼.
+/// Cuts every segment at its point masses and into parts no longer than `wave` times the length 1/β of a bending wave
+/// of the given circular frequency, β = (m ω²/(E I))^¼.
 VibratingStructure cut_for(const Internals& internals, const MassModel& mass, double circular_frequency);
 
 /// The lowest modes that [mass] asks for. The cut follows the highest frequency found until it fits.

@@ -128,7 +128,8 @@ int sketch_command(const std::string& path) {
 int sections_command(const std::string& pattern) {
     const std::string text = sections_text(pattern);
     if (text.empty()) {
-        complain(fmt::format("error: no section of the tables has \"{}\" in its name; without a pattern all are listed", pattern));
+        complain(fmt::format("error: no section of the tables has \"{}\" in its name; without a pattern all are listed",
+                             pattern));
         return exit_wrong_input;
     }
     standard_output()(text);

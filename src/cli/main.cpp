@@ -2,6 +2,8 @@
 
 #include <exception>
 
+#include <malloc.h>
+
 #include <CLI/CLI.hpp>
 #include <fmt/format.h>
 
@@ -13,13 +15,14 @@ namespace {
 
 using namespace groundsill::cli;
 
-constexpr const char* footer = "Exit codes: 0 analysed, within limits; 1 a check is over its limit; 2 wrong command line or model;\n"
-                               "3 the structure cannot be analysed; 4 an output could not be written.\n\n"
-                               "First steps:\n"
-                               "  groundsill new beam my-beam.toml     a commented model to start from\n"
-                               "  groundsill sketch my-beam.toml       the model as understood, before anything is solved\n"
-                               "  groundsill run my-beam.toml          forces, reactions and movements\n\n"
-                               "Results depend on the model; local codes govern; a licensed engineer reviews and signs.";
+constexpr const char* footer =
+    "Exit codes: 0 analysed, within limits; 1 a check is over its limit; 2 wrong command line or model;\n"
+    "3 the structure cannot be analysed; 4 an output could not be written.\n\n"
+    "First steps:\n"
+    "  groundsill new beam my-beam.toml     a commented model to start from\n"
+    "  groundsill sketch my-beam.toml       the model as understood, before anything is solved\n"
+    "  groundsill run my-beam.toml          forces, reactions and movements\n\n"
+    "Results depend on the model; local codes govern; a licensed engineer reviews and signs.";
 
 struct CommandLine {
     CLI::App app{"groundsill analyses beams and plane frames on supports that give: forces, reactions and movements\n"
@@ -37,7 +40,8 @@ struct CommandLine {
 
         run_app = app.add_subcommand("run", "Analyse a model and print a summary");
         run_app->add_option("MODEL", run.model, "The model, a TOML file")->required();
-        run_app->add_option("--json", run.json, "Write all results as JSON to a file, or to the standard output with -")->type_name("FILE");
+        run_app->add_option("--json", run.json, "Write all results as JSON to a file, or to the standard output with -")
+            ->type_name("FILE");
         run_app->add_option("--csv", run.csv, "Write the results as CSV files into a directory")->type_name("DIR");
         run_app->add_option("--places", run.places, "List values along each member at N equal parts; 0: extremes only")
             ->type_name("N")
@@ -75,6 +79,9 @@ struct CommandLine {
 } // namespace
 
 int main(int argc, char** argv) {
+    // Large vectors come and go: their memory is kept for the next one instead of being handed back and cleared anew.
+    mallopt(M_MMAP_THRESHOLD, 1 << 30);
+    mallopt(M_TRIM_THRESHOLD, 1 << 30);
     CommandLine line;
     try {
         line.app.parse(argc, argv);

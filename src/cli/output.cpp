@@ -81,7 +81,8 @@ OutputFile::OutputFile(std::filesystem::path place) : place_(std::move(place)) {
 }
 
 OutputFile::OutputFile(OutputFile&& other) noexcept
-    : place_(std::move(other.place_)), temporary_(std::move(other.temporary_)), file_(std::exchange(other.file_, nullptr)) {
+    : place_(std::move(other.place_)), temporary_(std::move(other.temporary_)),
+      file_(std::exchange(other.file_, nullptr)) {
     other.temporary_.clear();
 }
 

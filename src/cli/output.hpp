@@ -15,8 +15,9 @@ struct OutputError : std::runtime_error {
     using std::runtime_error::runtime_error;
 };
 
-/// A file on its way. Opened before the long work, so that a wrong path is found out at once; without commit() nothing is
-/// left behind. Where the place is taken by something else than a file (a device, a pipe) it is written straight through.
+/// A file on its way. Opened before the long work, so that a wrong path is found out at once; without commit() nothing
+/// is left behind. Where the place is taken by something else than a file (a device, a pipe) it is written straight
+/// through.
 class OutputFile {
   public:
     /// \throws OutputError when it cannot be opened
@@ -45,8 +46,8 @@ Sink standard_output();
 /// Flushes the standard output. \throws OutputError
 void finish_standard_output();
 
-/// From now on an interruption (SIGINT, SIGTERM) removes unfinished files and ends the program with exit code 4, and a closed
-/// pipe is an error of writing.
+/// From now on an interruption (SIGINT, SIGTERM) removes unfinished files and ends the program with exit code 4, and a
+/// closed pipe is an error of writing.
 void watch_for_interruption();
 
 } // namespace groundsill::cli

@@ -5,10 +5,11 @@
 //   i, j      start and end of the segment
 //   L         length, m;  c, s: cosine and sine of the angle from global x to the segment
 //   E A, E I, G A   axial, bending and shear stiffness, N, N m2, N
-//   e         deformations of the chord: eN = elongation; e1, e2 = rotations of the ends against the chord, each positive
+//   e         deformations of the chord: eN = elongation; e1, e2 = rotations of the ends against the chord, each
+//   positive
 //             where it goes with a sagging moment: e1 = -(θi - ψ), e2 = θj - ψ, ψ = (vj - vi)/L
-//   q         the forces that do work on them: N at the start, M1, M2 = bending moments at the two ends, sagging positive
-//   V         shear force dM/ds: without loads (M2 - M1)/L
+//   q         the forces that do work on them: N at the start, M1, M2 = bending moments at the two ends, sagging
+//   positive V         shear force dM/ds: without loads (M2 - M1)/L
 //
 // Forces "at an end" are those passed between node and segment, outside of loads that stand at the very end.
 
@@ -16,8 +17,8 @@
 
 namespace groundsill::elements {
 
-/// The precision in which deformations are taken and forces are summed, so that the rounding of large movements does not
-/// reach small deformations (64-bit mantissa on x86).
+/// The precision in which deformations are taken and forces are summed, so that the rounding of large movements does
+/// not reach small deformations (64-bit mantissa on x86).
 using Real = long double;
 
 /// What a segment is made of.
@@ -39,8 +40,9 @@ struct Deformation {
     Real second = 0;
 };
 
-/// The forces that go with them: N at the start, M1, M2, and the shear force V that is the same all along while no load acts.
-/// V is (M2 - M1)/L, but kept apart: where a soft shear release makes it small, that difference would be all round-off.
+/// The forces that go with them: N at the start, M1, M2, and the shear force V that is the same all along while no load
+/// acts. V is (M2 - M1)/L, but kept apart: where a soft shear release makes it small, that difference would be all
+/// round-off.
 struct BasicForces {
     Real N = 0;
     Real M1 = 0;
@@ -58,13 +60,14 @@ struct BasicStiffness {
     Real v2 = 0;
 
     BasicForces operator*(const Deformation& e) const {
-        return {axial * e.axial, k11 * e.first + k12 * e.second, k12 * e.first + k22 * e.second, v1 * e.first + v2 * e.second};
+        return {axial * e.axial, k11 * e.first + k12 * e.second, k12 * e.first + k22 * e.second,
+                v1 * e.first + v2 * e.second};
     }
 };
 
 /// The bending moments at the ends that the free releases leave open, and how flexible the segment is to them.
-/// A free moment release asks M = 0, a free shear release asks V = 0 at its end; what is left is q = particular + Z r with
-/// `count` columns in Z.
+/// A free moment release asks M = 0, a free shear release asks V = 0 at its end; what is left is q = particular + Z r
+/// with `count` columns in Z.
 struct BendingSpace {
     int count = 2;
     Real z1 = 0, z2 = 0; ///< the column of Z when count is 1
@@ -80,9 +83,9 @@ struct BendingFlexibility {
 
 /// How a movement of one end across the segment works while the ends cannot turn more than their releases let them.
 struct ShearPath {
-    bool passes = false; ///< whether a shear force can pass from end to end without loads
-    Real share = 0;      ///< M1 = -share L V and M2 = (1 - share) L V go with the shear force V
-    Real bending = 0;    ///< movement per V L from bending and shear deformation, m/(N m)
+    bool passes = false;  ///< whether a shear force can pass from end to end without loads
+    Real share = 0;       ///< M1 = -share L V and M2 = (1 - share) L V go with the shear force V
+    Real bending = 0;     ///< movement per V L from bending and shear deformation, m/(N m)
     Real flexibility = 0; ///< with the elastic shear releases added
 };
 
@@ -101,9 +104,9 @@ inline Real flexibility_of(const Restraint& restraint) {
 /// True where an axial release is free, so that the axial force follows from the loads alone.
 bool is_axially_free(const Frame& frame);
 
-/// Stiffness of the chord deformations by the flexibility method (Przemieniecki 1968, ch. 5, with the flexibilities of end
-/// springs added; free releases by projection on the forces that they can pass).
-/// \pre the releases leave the segment attached (self_mechanism gives an empty text)
+/// Stiffness of the chord deformations by the flexibility method (Przemieniecki 1968, ch. 5, with the flexibilities of
+/// end springs added; free releases by projection on the forces that they can pass). \pre the releases leave the
+/// segment attached (self_mechanism gives an empty text)
 BasicStiffness basic_stiffness(const Frame& frame);
 
 /// Why the releases let the segment move by itself, with both nodes held; empty when they do not.

@@ -144,7 +144,8 @@ BasicForces particular(const Frame& frame, const Shears& simple) {
 /// Fixed-end moments: e = F (p + Z r) + e0 = 0, seen by the moments that can pass.
 void set_moments(const Frame& frame, const Shears& simple, const LoadWork& work, FixedEnd& fixed) {
     const Real slips =
-        (flexibility_of(frame.start.shear) * simple.start + flexibility_of(frame.end.shear) * simple.end) / frame.length;
+        (flexibility_of(frame.start.shear) * simple.start + flexibility_of(frame.end.shear) * simple.end) /
+        frame.length;
     const BasicForces p = particular(frame, simple);
     const BendingFlexibility f = end_moment_flexibility(frame);
     const Real gap1 = work.first - slips + f.f11 * p.M1 + f.f12 * p.M2;
@@ -154,8 +155,8 @@ void set_moments(const Frame& frame, const Shears& simple, const LoadWork& work,
     fixed.q.M2 = p.M2 - (k.k12 * gap1 + k.k22 * gap2);
 }
 
-/// Fixed-end shears. Where a shear passes between the ends it is found from the movement that it must undo, not as a difference
-/// of moments: with a soft shear release it is small beside them.
+/// Fixed-end shears. Where a shear passes between the ends it is found from the movement that it must undo, not as a
+/// difference of moments: with a soft shear release it is small beside them.
 void set_shears(const Frame& frame, const Shears& simple, const LoadWork& work, FixedEnd& fixed) {
     const Real total = simple.end - simple.start; // all loads across
     if (frame.start.shear.is_free() || frame.end.shear.is_free()) {
@@ -172,7 +173,8 @@ void set_shears(const Frame& frame, const Shears& simple, const LoadWork& work, 
     // per L: bending (V - V0) + slips of both ends + the end rotations that the loads make = 0
     const Real turn = ((1 - path.share) * work.second - path.share * work.first) / frame.length;
     const Real squared = frame.length * frame.length;
-    const Real slip_start = flexibility_of(frame.start.shear) / squared, slip_end = flexibility_of(frame.end.shear) / squared;
+    const Real slip_start = flexibility_of(frame.start.shear) / squared,
+               slip_end = flexibility_of(frame.end.shear) / squared;
     fixed.V_start = (simple.start * path.bending - slip_end * total - turn) / path.flexibility;
     fixed.V_end = (simple.end * path.bending + slip_start * total - turn) / path.flexibility;
 }
@@ -240,16 +242,19 @@ void place_start(const Frame& frame, const Loading& loading, const State& node_i
         start.along = node_j.along - free_end.N * flexibility_of(frame.end.axial) - free_end.along;
     }
 
-    // What the attached connections say of the segment's own ends. A gap is force over stiffness, so that a soft spring says
-    // little: its force is a small difference. Both shears place the segment unless one is far softer than the segment itself.
+    // What the attached connections say of the segment's own ends. A gap is force over stiffness, so that a soft spring
+    // says little: its force is a small difference. Both shears place the segment unless one is far softer than the
+    // segment itself.
     const Real soft = 10 * L * L * L * frame.bending_flexibility;
     const auto places = [&](const Restraint& restraint, Real limit) {
         return !restraint.is_free() && flexibility_of(restraint) <= limit;
     };
     const Real across_i = node_i.across - start.V * flexibility_of(frame.start.shear);
     const Real across_j = node_j.across + free_end.V * flexibility_of(frame.end.shear);
-    const bool start_moment = places(frame.start.moment, soft / (L * L)), end_moment = places(frame.end.moment, soft / (L * L));
-    const bool by_shears = (places(frame.start.shear, soft) && places(frame.end.shear, soft)) || !(start_moment || end_moment);
+    const bool start_moment = places(frame.start.moment, soft / (L * L)),
+               end_moment = places(frame.end.moment, soft / (L * L));
+    const bool by_shears =
+        (places(frame.start.shear, soft) && places(frame.end.shear, soft)) || !(start_moment || end_moment);
     if (by_shears && !frame.start.shear.is_free() && !frame.end.shear.is_free()) {
         start.across = across_i;
         start.rotation = (across_j - across_i - free_end.across) / L;
@@ -260,8 +265,9 @@ void place_start(const Frame& frame, const Loading& loading, const State& node_i
     } else {
         start.rotation = node_j.rotation - free_end.M * flexibility_of(frame.end.moment) - free_end.rotation;
     }
-    const bool by_start = !frame.start.shear.is_free() &&
-                          (frame.end.shear.is_free() || flexibility_of(frame.start.shear) <= flexibility_of(frame.end.shear));
+    const bool by_start =
+        !frame.start.shear.is_free() &&
+        (frame.end.shear.is_free() || flexibility_of(frame.start.shear) <= flexibility_of(frame.end.shear));
     start.across = by_start ? across_i : across_j - free_end.across - start.rotation * L;
 }
 

@@ -46,7 +46,7 @@ struct LoadPiece {
 
 /// The loads of a segment, cut where they change.
 struct Loading {
-    std::vector<LoadPiece> pieces; ///< from 0 to L, at least one
+    std::vector<LoadPiece> pieces;        ///< from 0 to L, at least one
     Real end_P = 0, end_Q = 0, end_m = 0; ///< point loads at the very end
     Real strain = 0;
     Real curvature = 0;
@@ -67,10 +67,10 @@ State integrate(const Frame& frame, const Loading& loading, const State& start);
 
 /// Forces passed at the ends when the loads act and no node moves (fixed-end forces).
 struct FixedEnd {
-    BasicForces q;     ///< N at the start, M1, M2; V stays 0
-    Real P = 0;        ///< N at the start minus N at the end: all loads along
-    Real V_start = 0;  ///< shear force at the start
-    Real V_end = 0;    ///< and at the end
+    BasicForces q;    ///< N at the start, M1, M2; V stays 0
+    Real P = 0;       ///< N at the start minus N at the end: all loads along
+    Real V_start = 0; ///< shear force at the start
+    Real V_end = 0;   ///< and at the end
 };
 
 /// Fixed-end forces by the force method: the simply supported segment under the loads, corrected by q so that the nodes

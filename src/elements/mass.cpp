@@ -7,8 +7,8 @@ namespace groundsill::elements {
 namespace {
 
 /// Gauss-Legendre with five points, exact to degree 9: two cubic shapes times a linear mass make 7.
-constexpr Real gauss_nodes[] = {-0.906179845938663992797627L, -0.538469310105683091036314L, 0, 0.538469310105683091036314L,
-                                0.906179845938663992797627L};
+constexpr Real gauss_nodes[] = {-0.906179845938663992797627L, -0.538469310105683091036314L, 0,
+                                0.538469310105683091036314L, 0.906179845938663992797627L};
 constexpr Real gauss_weights[] = {0.118463442528094543757132L, 0.239314335249683234020646L, 0.284444444444444444444444L,
                                   0.239314335249683234020646L, 0.118463442528094543757132L};
 
@@ -46,7 +46,8 @@ Shapes shapes_at(const Frame& frame, const Starts& starts, Real s) {
 void add_mass(const Shapes& shapes, Real dm, EndMatrix& M) {
     for (int i = 0; i < 6; ++i) {
         for (int j = 0; j < 6; ++j)
-            M[6 * i + j] += static_cast<double>(dm * (shapes.along[i] * shapes.along[j] / 2 + shapes.across[i] * shapes.across[j]));
+            M[6 * i + j] +=
+                static_cast<double>(dm * (shapes.along[i] * shapes.along[j] / 2 + shapes.across[i] * shapes.across[j]));
         if (i % 3 == 0) M[7 * i] += static_cast<double>(dm * shapes.along[i] / 2);
     }
 }
@@ -55,7 +56,8 @@ void add_mass(const Shapes& shapes, Real dm, EndMatrix& M) {
 
 State start_of_shape(const Frame& frame, const BasicStiffness& stiffness, const State& node_i, const State& node_j) {
     const Real chord = (node_j.across - node_i.across) / frame.length;
-    const BasicForces q = stiffness * Deformation{node_j.along - node_i.along, chord - node_i.rotation, node_j.rotation - chord};
+    const BasicForces q =
+        stiffness * Deformation{node_j.along - node_i.along, chord - node_i.rotation, node_j.rotation - chord};
     State start;
     start.N = q.N;
     start.M = q.M1;
@@ -82,7 +84,8 @@ EndMatrix consistent_mass(const Frame& frame, const BasicStiffness& stiffness, c
         const Shapes shapes = shapes_at(frame, starts, frame.length * (1 + gauss_nodes[g]) / 2);
         const Real inertia = mass.rotary * gauss_weights[g] * frame.length;
         for (int i = 0; i < 6; ++i)
-            for (int j = 0; j < 6; ++j) M[6 * i + j] += static_cast<double>(inertia * shapes.rotation[i] * shapes.rotation[j]);
+            for (int j = 0; j < 6; ++j)
+                M[6 * i + j] += static_cast<double>(inertia * shapes.rotation[i] * shapes.rotation[j]);
     }
     return M;
 }

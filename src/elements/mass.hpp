@@ -23,9 +23,10 @@ struct SegmentMass {
 /// Symmetric 6 x 6 matrix over along, across, rotation at i and the same at j, in the segment's axes, row by row.
 using EndMatrix = std::array<double, 36>;
 
-/// Consistent mass (Archer 1963): ∫ m φᵢ φⱼ + ∫ ρI θᵢ θⱼ over the shapes that unit movements of the nodes give the segment,
-/// releases and shear flexibility included. Along the axis the mean of consistent and lumped mass is taken, whose frequency
-/// error is of fourth order in the element length instead of second (Goudreau and Taylor 1972, from memory; tested by refining).
+/// Consistent mass (Archer 1963): ∫ m φᵢ φⱼ + ∫ ρI θᵢ θⱼ over the shapes that unit movements of the nodes give the
+/// segment, releases and shear flexibility included. Along the axis the mean of consistent and lumped mass is taken,
+/// whose frequency error is of fourth order in the element length instead of second (Goudreau and Taylor 1972, from
+/// memory; tested by refining).
 EndMatrix consistent_mass(const Frame& frame, const BasicStiffness& stiffness, const SegmentMass& mass);
 
 /// The state at the start of a segment whose nodes move, without loads.

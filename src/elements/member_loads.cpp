@@ -28,7 +28,9 @@ void add_distributed(const MemberLoad& load, Real factor, const SegmentPlace& pl
     const Real b = std::min(Real(load.b), place.offset + place.length);
     const Real span = Real(load.b) - load.a;
     if (!(b > a)) return;
-    const auto at = [&](Real s, double from, double to) { return (from + (Real(to) - from) * ((s - load.a) / span)) * factor; };
+    const auto at = [&](Real s, double from, double to) {
+        return (from + (Real(to) - from) * ((s - load.a) / span)) * factor;
+    };
     const Local start = to_local(load, at(a, load.first_a, load.first_b), at(a, load.second_a, load.second_b), place);
     const Local end = to_local(load, at(b, load.first_a, load.first_b), at(b, load.second_a, load.second_b), place);
     loads.lines.push_back({a - place.offset, b - place.offset, start.along, start.across, end.along, end.across});
@@ -40,15 +42,20 @@ void add_point(const MemberLoad& load, Real factor, const SegmentPlace& place, S
     if (s < -near && place.offset > 0) return;
     if (place.is_last ? s > place.length + near * 1000 : s > place.length - near) return;
     const Local force = to_local(load, load.first_a, load.second_a, place);
-    loads.points.push_back({std::clamp(s, Real(0), place.length), force.along * factor, force.across * factor, load.moment * factor});
+    loads.points.push_back(
+        {std::clamp(s, Real(0), place.length), force.along * factor, force.across * factor, load.moment * factor});
 }
 
 } // namespace
 
 void add_load(const MemberLoad& load, Real factor, const SegmentPlace& place, SegmentLoads& loads) {
     switch (load.kind) {
-    case MemberLoad::Kind::distributed: add_distributed(load, factor, place, loads); break;
-    case MemberLoad::Kind::point: add_point(load, factor, place, loads); break;
+    case MemberLoad::Kind::distributed:
+        add_distributed(load, factor, place, loads);
+        break;
+    case MemberLoad::Kind::point:
+        add_point(load, factor, place, loads);
+        break;
     case MemberLoad::Kind::temperature: {
         Real mean = load.top;
         if (load.through_depth) {
@@ -60,7 +67,9 @@ void add_load(const MemberLoad& load, Real factor, const SegmentPlace& place, Se
         loads.strain += factor * place.expansion * mean;
         break;
     }
-    case MemberLoad::Kind::lack_of_fit: loads.strain += factor * load.amount / place.member_length; break;
+    case MemberLoad::Kind::lack_of_fit:
+        loads.strain += factor * load.amount / place.member_length;
+        break;
     }
 }
 

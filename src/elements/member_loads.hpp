@@ -11,9 +11,10 @@ struct SegmentPlace {
     Real length = 0;        ///< m
     Real member_length = 0; ///< m
     Real cosine = 1, sine = 0;
-    bool is_last = true;           ///< the segment ends where the member ends
-    double expansion = 0;          ///< 1/K
-    double depth = 0, bottom = 0;  ///< of the section and from centroid to the face at -across, m; used by face temperatures
+    bool is_last = true;  ///< the segment ends where the member ends
+    double expansion = 0; ///< 1/K
+    double depth = 0,
+           bottom = 0; ///< of the section and from centroid to the face at -across, m; used by face temperatures
 };
 
 /// Adds `factor` times a load to what acts on the segment; nothing where the load lies on another segment.

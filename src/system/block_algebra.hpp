@@ -9,7 +9,8 @@ namespace groundsill {
 inline void subtract_product(const Block& A, const Block& B, Block& C) {
     for (int row = 0; row < 3; ++row)
         for (int column = 0; column < 3; ++column)
-            C[3 * row + column] -= A[3 * row] * B[column] + A[3 * row + 1] * B[3 + column] + A[3 * row + 2] * B[6 + column];
+            C[3 * row + column] -=
+                A[3 * row] * B[column] + A[3 * row + 1] * B[3 + column] + A[3 * row + 2] * B[6 + column];
 }
 
 /// C -= A Bᵀ
@@ -44,7 +45,8 @@ inline void subtract_times(const Block& A, const double* x, double* y) {
 
 /// y -= Aᵀ x
 inline void subtract_transposed_times(const Block& A, const double* x, double* y) {
-    for (int column = 0; column < 3; ++column) y[column] -= A[column] * x[0] + A[3 + column] * x[1] + A[6 + column] * x[2];
+    for (int column = 0; column < 3; ++column)
+        y[column] -= A[column] * x[0] + A[3 + column] * x[1] + A[6 + column] * x[2];
 }
 
 } // namespace groundsill

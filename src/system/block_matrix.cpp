@@ -28,7 +28,8 @@ Block chord_rows(const Structure& structure, const Segment& segment, bool at_end
     double c = static_cast<double>(segment.frame.cosine);
     double s = static_cast<double>(segment.frame.sine);
     if (const TurnedAxes* axes = structure.turned_axes(at_end ? segment.j : segment.i)) {
-        const double turned = static_cast<double>(segment.frame.cosine * axes->cosine + segment.frame.sine * axes->sine);
+        const double turned =
+            static_cast<double>(segment.frame.cosine * axes->cosine + segment.frame.sine * axes->sine);
         s = static_cast<double>(segment.frame.sine * axes->cosine - segment.frame.cosine * axes->sine);
         c = turned;
     }
@@ -62,8 +63,12 @@ Block transposed(const Block& block) {
 /// Fills the pattern above the diagonal: sorted rows by column, each once.
 void make_pattern(const Structure& structure, BlockMatrix& matrix) {
     const int n = structure.node_count;
-    const auto column_of = [&](const Segment& segment) { return std::max(matrix.place_of[segment.i], matrix.place_of[segment.j]); };
-    const auto row_of = [&](const Segment& segment) { return std::min(matrix.place_of[segment.i], matrix.place_of[segment.j]); };
+    const auto column_of = [&](const Segment& segment) {
+        return std::max(matrix.place_of[segment.i], matrix.place_of[segment.j]);
+    };
+    const auto row_of = [&](const Segment& segment) {
+        return std::min(matrix.place_of[segment.i], matrix.place_of[segment.j]);
+    };
     std::vector<int> start(n + 1, 0);
     for (const Segment& segment : structure.segments) ++start[column_of(segment) + 1];
     for (int k = 0; k < n; ++k) start[k + 1] += start[k];
@@ -89,7 +94,8 @@ void make_pattern(const Structure& structure, BlockMatrix& matrix) {
 void clear_inactive(const Structure& structure, int row_node, int column_node, Block& block) {
     for (int row = 0; row < 3; ++row)
         for (int column = 0; column < 3; ++column)
-            if (!structure.active[3 * row_node + row] || !structure.active[3 * column_node + column]) block[3 * row + column] = 0;
+            if (!structure.active[3 * row_node + row] || !structure.active[3 * column_node + column])
+                block[3 * row + column] = 0;
 }
 
 /// The block of a matrix between two nodes, given for (i, j); added transposed where j stands before i.
@@ -129,7 +135,8 @@ Block turned_part(const std::array<double, 36>& V, int row, int column, const Bl
     for (int i = 0; i < 3; ++i)
         for (int j = 0; j < 3; ++j)
             for (int k = 0; k < 3; ++k)
-                for (int l = 0; l < 3; ++l) result[3 * i + j] += A[3 * k + i] * V[6 * (row + k) + column + l] * B[3 * l + j];
+                for (int l = 0; l < 3; ++l)
+                    result[3 * i + j] += A[3 * k + i] * V[6 * (row + k) + column + l] * B[3 * l + j];
     return result;
 }
 
@@ -159,7 +166,8 @@ BlockMatrix assemble(const Structure& structure) {
     return matrix;
 }
 
-void add_end_matrix(const Structure& structure, const Segment& segment, const std::array<double, 36>& values, BlockMatrix& matrix) {
+void add_end_matrix(const Structure& structure, const Segment& segment, const std::array<double, 36>& values,
+                    BlockMatrix& matrix) {
     const Block at_i = turn(structure, segment, segment.i), at_j = turn(structure, segment, segment.j);
     Block ii = turned_part(values, 0, 0, at_i, at_i), ij = turned_part(values, 0, 3, at_i, at_j),
           jj = turned_part(values, 3, 3, at_j, at_j);

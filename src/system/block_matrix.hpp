@@ -14,13 +14,13 @@ using Block = std::array<double, 9>;
 /// A symmetric matrix of blocks: the diagonal and what stands above it, by columns with rising rows.
 /// Row and column k belong to node `node_at[k]`; inactive directions carry 1 on the diagonal and nothing else.
 struct BlockMatrix {
-    std::vector<int> node_at;      ///< by place in the matrix
-    std::vector<int> place_of;     ///< by node
+    std::vector<int> node_at;  ///< by place in the matrix
+    std::vector<int> place_of; ///< by node
     std::vector<Block> diagonal;
     std::vector<int> column_start; ///< into rows and blocks, one more at the end
     std::vector<int> rows;
     std::vector<Block> blocks;
-    int bandwidth = 0;             ///< largest distance of an entry from the diagonal, in blocks
+    int bandwidth = 0; ///< largest distance of an entry from the diagonal, in blocks
 
     int size() const { return static_cast<int>(diagonal.size()); }
 };
@@ -30,8 +30,10 @@ struct BlockMatrix {
 /// Duff 1996).
 BlockMatrix assemble(const Structure& structure);
 
-/// Adds a symmetric 6 x 6 matrix over the end movements of a segment, in its axes; entries of inactive directions are left out.
-void add_end_matrix(const Structure& structure, const Segment& segment, const std::array<double, 36>& values, BlockMatrix& matrix);
+/// Adds a symmetric 6 x 6 matrix over the end movements of a segment, in its axes; entries of inactive directions are
+/// left out.
+void add_end_matrix(const Structure& structure, const Segment& segment, const std::array<double, 36>& values,
+                    BlockMatrix& matrix);
 
 /// Adds the same to x and y of a node (a point mass), where they are active.
 void add_to_node(const Structure& structure, int node, double value, BlockMatrix& matrix);

@@ -12,13 +12,12 @@ inline elements::Real dot(const std::vector<elements::Real>& a, const std::vecto
     return sum;
 }
 
-/// Preconditioned conjugate gradients (Hestenes and Stiefel 1952) for A x = f from a start whose residual is r, until the
-/// residual has fallen by 1e-9.
-/// \param apply      apply(p, Ap) sets Ap = A p, A symmetric and not negative
-/// \param invert     invert(r) gives z near A⁻¹ r
-/// \param move       move(alpha, p) does x += alpha p
+/// Preconditioned conjugate gradients (Hestenes and Stiefel 1952) for A x = f from a start whose residual is r, until
+/// the residual has fallen by 1e-9. \param apply      apply(p, Ap) sets Ap = A p, A symmetric and not negative \param
+/// invert     invert(r) gives z near A⁻¹ r \param move       move(alpha, p) does x += alpha p
 template <class Apply, class Invert, class Move>
-void conjugate_gradients(std::vector<elements::Real> r, int steps, const Apply& apply, const Invert& invert, const Move& move) {
+void conjugate_gradients(std::vector<elements::Real> r, int steps, const Apply& apply, const Invert& invert,
+                         const Move& move) {
     using elements::Real;
     std::vector<Real> z = invert(r);
     std::vector<Real> p = z, Ap(z.size());

@@ -46,7 +46,8 @@ std::string direction_of(const Movement& m, Real largest, Real size) {
     if (std::abs(m.y) <= still * travel) return "along x";
     if (std::abs(m.x) <= still * travel) return "along y";
     const Real sign = m.x < 0 ? -1 : 1;
-    return fmt::format("along ({:.2f}, {:.2f})", static_cast<double>(sign * m.x / travel), static_cast<double>(sign * m.y / travel));
+    return fmt::format("along ({:.2f}, {:.2f})", static_cast<double>(sign * m.x / travel),
+                       static_cast<double>(sign * m.y / travel));
 }
 
 struct Moving {
@@ -60,7 +61,8 @@ std::vector<Moving> moving_nodes(const Structure& structure, const Shape& shape,
     for (int node = 0; node < structure.node_count; ++node) {
         const std::string direction = direction_of(movement_of(structure, shape, node), largest, structure.size);
         if (direction.empty()) continue;
-        auto group = std::find_if(groups.begin(), groups.end(), [&](const Moving& g) { return g.direction == direction; });
+        auto group =
+            std::find_if(groups.begin(), groups.end(), [&](const Moving& g) { return g.direction == direction; });
         if (group == groups.end()) {
             if (groups.size() == most_names) break;
             group = groups.insert(groups.end(), Moving{direction, {}});
@@ -87,7 +89,8 @@ std::vector<std::string> moving_members(const Structure& structure, const Shape&
     for (const Segment& segment : structure.segments) {
         const std::string& name = structure.model->members[segment.member].name;
         if (!names.empty() && names.back() == name) continue;
-        if (moves(structure, shape, segment.i, largest) || moves(structure, shape, segment.j, largest)) names.push_back(name);
+        if (moves(structure, shape, segment.i, largest) || moves(structure, shape, segment.j, largest))
+            names.push_back(name);
     }
     return names;
 }
@@ -123,14 +126,17 @@ void add_open_releases(const Structure& structure, const Segment& segment, const
 }
 
 /// Directions that supports leave free and in which the shape moves.
-void add_free_supports(const Structure& structure, const Shape& shape, Real largest, std::vector<std::string>& freedoms) {
+void add_free_supports(const Structure& structure, const Shape& shape, Real largest,
+                       std::vector<std::string>& freedoms) {
     for (const Support& support : structure.model->supports) {
-        const Real values[] = {shape[3 * support.node], shape[3 * support.node + 1], shape[3 * support.node + 2] * structure.size};
+        const Real values[] = {shape[3 * support.node], shape[3 * support.node + 1],
+                               shape[3 * support.node + 2] * structure.size};
         const Restraint* restraints[] = {&support.x, &support.y, &support.rotation};
         const char* names[] = {"x", "y", "rotation"};
         for (int c = 0; c < 3; ++c)
             if (restraints[c]->is_free() && std::abs(values[c]) > still * largest)
-                freedoms.push_back(fmt::format("the support at {} leaves {} free", node_name(structure, support.node), names[c]));
+                freedoms.push_back(
+                    fmt::format("the support at {} leaves {} free", node_name(structure, support.node), names[c]));
     }
 }
 
@@ -153,7 +159,8 @@ std::string describe_mechanism(const Structure& structure, const Shape& shape) {
     std::vector<std::string> freedoms;
     add_free_supports(structure, shape, largest, freedoms);
     for (const Segment& segment : structure.segments)
-        if (freedoms.size() <= most_names && (moves(structure, shape, segment.i, largest) || moves(structure, shape, segment.j, largest)))
+        if (freedoms.size() <= most_names &&
+            (moves(structure, shape, segment.i, largest) || moves(structure, shape, segment.j, largest)))
             add_open_releases(structure, segment, shape, largest, freedoms);
     std::string text = "the structure is a mechanism: ";
     for (std::size_t k = 0; k < parts.size(); ++k) {
@@ -169,10 +176,12 @@ std::string describe_self_mechanisms(const Structure& structure) {
     std::vector<std::string> found;
     for (const Segment& segment : structure.segments) {
         const std::string why = elements::self_mechanism(segment.frame);
-        if (!why.empty()) found.push_back(fmt::format("the member {}: {}", structure.model->members[segment.member].name, why));
+        if (!why.empty())
+            found.push_back(fmt::format("the member {}: {}", structure.model->members[segment.member].name, why));
     }
     if (found.empty()) return {};
-    return fmt::format("released into a mechanism by itself is {}. Hold one of these releases, or give it a stiffness.", join(found));
+    return fmt::format("released into a mechanism by itself is {}. Hold one of these releases, or give it a stiffness.",
+                       join(found));
 }
 
 } // namespace groundsill

@@ -41,26 +41,29 @@ Eigen::MatrixXd dense(const BlockMatrix& matrix, const std::vector<int>& directi
     const auto put = [&](int row_place, int column_place, const Block& block) {
         for (int i = 0; i < 3; ++i)
             for (int j = 0; j < 3; ++j) {
-                const int row = number[3 * matrix.node_at[row_place] + i], column = number[3 * matrix.node_at[column_place] + j];
+                const int row = number[3 * matrix.node_at[row_place] + i],
+                          column = number[3 * matrix.node_at[column_place] + j];
                 if (row >= 0 && column >= 0) result(row, column) = result(column, row) = block[3 * i + j];
             }
     };
     for (int column = 0; column < matrix.size(); ++column) {
         put(column, column, matrix.diagonal[column]);
-        for (int k = matrix.column_start[column]; k < matrix.column_start[column + 1]; ++k) put(matrix.rows[k], column, matrix.blocks[k]);
+        for (int k = matrix.column_start[column]; k < matrix.column_start[column + 1]; ++k)
+            put(matrix.rows[k], column, matrix.blocks[k]);
     }
     return result;
 }
 
 /// M x = μ (K - σ M) x with the second matrix positive definite: massless movements have μ = 0 and stand last.
-EigenPairs dense_modes(const Structure& structure, const BlockMatrix& K, const BlockMatrix& M, int count, double sigma) {
+EigenPairs dense_modes(const Structure& structure, const BlockMatrix& K, const BlockMatrix& M, int count,
+                       double sigma) {
     const std::vector<int> directions = active_directions(structure);
     const Eigen::MatrixXd mass = dense(M, directions, structure.directions());
     const Eigen::MatrixXd stiffness = dense(K, directions, structure.directions()) - sigma * mass;
     // scaled to a diagonal of 1, so that units do not spoil the Cholesky factor
     const Eigen::VectorXd scale = stiffness.diagonal().cwiseSqrt().cwiseInverse();
-    const Eigen::GeneralizedSelfAdjointEigenSolver<Eigen::MatrixXd> solver(scale.asDiagonal() * mass * scale.asDiagonal(),
-                                                                           scale.asDiagonal() * stiffness * scale.asDiagonal());
+    const Eigen::GeneralizedSelfAdjointEigenSolver<Eigen::MatrixXd> solver(
+        scale.asDiagonal() * mass * scale.asDiagonal(), scale.asDiagonal() * stiffness * scale.asDiagonal());
     if (solver.info() != Eigen::Success) throw std::runtime_error("the natural frequencies did not converge");
     EigenPairs pairs;
     const Eigen::Index n = mass.rows();
@@ -153,7 +156,8 @@ EigenPairs sparse_modes(const BlockMatrix& K, const BlockMatrix& M, int count, d
     invert.perform_op(image.data(), start.data());
     solver.init(start.data());
     solver.compute(Spectra::SortRule::LargestMagn, 1000, 1e-12, Spectra::SortRule::SmallestAlge);
-    if (solver.info() != Spectra::CompInfo::Successful) throw std::runtime_error("the natural frequencies did not converge");
+    if (solver.info() != Spectra::CompInfo::Successful)
+        throw std::runtime_error("the natural frequencies did not converge");
     for (Eigen::Index k = 0; k < solver.eigenvalues().size(); ++k) {
         const Eigen::VectorXd x = solver.eigenvectors().col(k);
         pairs.values.push_back(solver.eigenvalues()[k]);
@@ -186,7 +190,8 @@ void check_pairs(const BlockMatrix& K, const BlockMatrix& M, EigenPairs& pairs) 
                                                  std::sqrt(missing / whole)));
         for (std::size_t j = 0; j < k; ++j)
             if (std::abs(dot(pairs.vectors[j], Mx[k])) > 1e-6)
-                throw std::runtime_error(fmt::format("modes {} and {} fail their check: they are not orthogonal", j + 1, k + 1));
+                throw std::runtime_error(
+                    fmt::format("modes {} and {} fail their check: they are not orthogonal", j + 1, k + 1));
     }
 }
 
@@ -196,12 +201,14 @@ int eigenvalues_below(const BlockMatrix& K, const BlockMatrix& M, double sigma) 
     return Factor(shifted(K, sigma, M), false).negative_pivots();
 }
 
-EigenPairs lowest_modes(const Structure& structure, const BlockMatrix& K, const BlockMatrix& M, int count, bool is_free) {
+EigenPairs lowest_modes(const Structure& structure, const BlockMatrix& K, const BlockMatrix& M, int count,
+                        bool is_free) {
     const double sigma = is_free ? shift_below_zero(K, M) : 0;
     const int directions = static_cast<int>(std::count(structure.active.begin(), structure.active.end(), 1));
     // a few more than asked for: they separate the last one from its neighbours
     const int wanted = count + 3;
-    EigenPairs pairs = directions <= most_dense ? dense_modes(structure, K, M, wanted, sigma) : sparse_modes(K, M, wanted, sigma);
+    EigenPairs pairs =
+        directions <= most_dense ? dense_modes(structure, K, M, wanted, sigma) : sparse_modes(K, M, wanted, sigma);
     check_pairs(K, M, pairs);
     if (pairs.values.empty()) return pairs;
     const std::size_t kept = std::min<std::size_t>(count, pairs.values.size());

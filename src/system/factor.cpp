@@ -10,8 +10,10 @@ Factor::Factor(const BlockMatrix& matrix, bool hold_small_pivots)
     : hold_small_pivots_(hold_small_pivots), band_(matrix.bandwidth), is_band_(matrix.bandwidth <= widest_band),
       node_at_(matrix.node_at) {
     pivots_.resize(matrix.diagonal.size());
-    if (is_band_) factorise_band(matrix);
-    else factorise_sparse(matrix);
+    if (is_band_)
+        factorise_band(matrix);
+    else
+        factorise_sparse(matrix);
     for (Held& held : held_) held.direction = 3 * node_at_[held.direction / 3] + held.direction % 3;
 }
 
@@ -53,7 +55,8 @@ void Factor::factorise_band(const BlockMatrix& matrix) {
         for (int i = 0; i < below; ++i) {
             const Block L = times_inverse(column[i], D);
             for (int j = 0; j < i; ++j) {
-                // A_jk is still needed unscaled, so scale row i last: column[j] for j < i holds L_jk; L_ik A_jkᵀ = A_ik L_jkᵀ
+                // A_jk is still needed unscaled, so scale row i last: column[j] for j < i holds L_jk; L_ik A_jkᵀ = A_ik
+                // L_jkᵀ
                 subtract_product_transposed(column[i], column[j], lower_[std::size_t(k + 1 + j) * b + (i - j - 1)]);
             }
             subtract_product_transposed(L, column[i], diagonal[k + 1 + i]);
@@ -63,8 +66,8 @@ void Factor::factorise_band(const BlockMatrix& matrix) {
 }
 
 void Factor::find_columns(const BlockMatrix& matrix) {
-    // Elimination tree and column counts (Liu 1990): row k of L has a block at every node on the paths from the entries of
-    // column k of the matrix up to k.
+    // Elimination tree and column counts (Liu 1990): row k of L has a block at every node on the paths from the entries
+    // of column k of the matrix up to k.
     const int n = matrix.size();
     parent_.assign(n, -1);
     std::vector<int> mark(n, -1), count(n, 0);
@@ -122,8 +125,10 @@ void Factor::solve(std::vector<double>& x) const {
     std::vector<double> y(x.size());
     for (std::size_t place = 0; place < node_at_.size(); ++place)
         for (int c = 0; c < 3; ++c) y[3 * place + c] = x[3 * std::size_t(node_at_[place]) + c];
-    if (is_band_) solve_band(y);
-    else solve_sparse(y);
+    if (is_band_)
+        solve_band(y);
+    else
+        solve_sparse(y);
     for (std::size_t place = 0; place < node_at_.size(); ++place)
         for (int c = 0; c < 3; ++c) x[3 * std::size_t(node_at_[place]) + c] = y[3 * place + c];
 }
@@ -136,7 +141,8 @@ void Factor::solve_band(std::vector<double>& x) const {
     for (int k = n - 1; k >= 0; --k) {
         solve_pivot(pivots_[k], &x[3 * std::size_t(k)]);
         for (int i = 0; i < std::min(b, n - 1 - k); ++i)
-            subtract_transposed_times(lower_[std::size_t(k) * b + i], &x[3 * std::size_t(k + 1 + i)], &x[3 * std::size_t(k)]);
+            subtract_transposed_times(lower_[std::size_t(k) * b + i], &x[3 * std::size_t(k + 1 + i)],
+                                      &x[3 * std::size_t(k)]);
     }
 }
 

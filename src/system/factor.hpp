@@ -13,9 +13,9 @@ struct Pivot {
     double l10 = 0, l20 = 0, l21 = 0;
 };
 
-/// The factorised stiffness. A pivot far below its diagonal (less than `small_pivot` of it) may stand for a direction in which
-/// nothing resists: such a direction is held by a spring as stiff as its diagonal, and is listed, so that the factor exists
-/// and stays well conditioned; whether it is a mechanism is found out elsewhere (mechanism.hpp).
+/// The factorised stiffness. A pivot far below its diagonal (less than `small_pivot` of it) may stand for a direction
+/// in which nothing resists: such a direction is held by a spring as stiff as its diagonal, and is listed, so that the
+/// factor exists and stays well conditioned; whether it is a mechanism is found out elsewhere (mechanism.hpp).
 class Factor {
   public:
     static constexpr double small_pivot = 1e-10;
@@ -51,10 +51,10 @@ class Factor {
     bool is_band_ = false;
     std::vector<int> node_at_;
     std::vector<Pivot> pivots_;
-    std::vector<Block> lower_;         ///< band: rows k+1 .. k+b of column k; sparse: by column_start_
+    std::vector<Block> lower_; ///< band: rows k+1 .. k+b of column k; sparse: by column_start_
     std::vector<std::size_t> column_start_;
     std::vector<int> rows_;
-    std::vector<int> parent_;          ///< elimination tree
+    std::vector<int> parent_; ///< elimination tree
     std::vector<Held> held_;
 };
 

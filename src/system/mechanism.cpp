@@ -15,8 +15,8 @@ using Matrix = Eigen::Matrix<Real, Eigen::Dynamic, Eigen::Dynamic>;
 /// Most directions whose shapes are looked at one by one; the time grows with the square.
 constexpr std::size_t most_shapes = 200;
 
-/// The shape that forms when one held direction is moved and the others stay held: (K + S) v = s_j e_j, with S the springs that
-/// the factor adds, refined member by member.
+/// The shape that forms when one held direction is moved and the others stay held: (K + S) v = s_j e_j, with S the
+/// springs that the factor adds, refined member by member.
 Shape held_shape(const Structure& structure, const Factor& factor, std::size_t index) {
     const auto& held = factor.held();
     const auto apply = [&](const Shape& p, Shape& Kp) {
@@ -57,7 +57,8 @@ Real weighted(const Shape& weight, const Shape& x, const Shape& y) {
 Shape combined(const std::vector<Shape>& shapes, const Matrix& amounts, Eigen::Index column) {
     Shape sum(shapes[0].size(), 0);
     for (std::size_t k = 0; k < shapes.size(); ++k)
-        for (std::size_t d = 0; d < sum.size(); ++d) sum[d] += amounts(static_cast<Eigen::Index>(k), column) * shapes[k][d];
+        for (std::size_t d = 0; d < sum.size(); ++d)
+            sum[d] += amounts(static_cast<Eigen::Index>(k), column) * shapes[k][d];
     return sum;
 }
 

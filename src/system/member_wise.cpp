@@ -56,10 +56,13 @@ Real clean_sum(Real a, Real b) {
 }
 
 /// Adds forces on a segment's ends to the directions of its nodes.
-void scatter(const Structure& structure, const Segment& segment, const EndForces& f, Real factor, std::vector<Real>& values) {
+void scatter(const Structure& structure, const Segment& segment, const EndForces& f, Real factor,
+             std::vector<Real>& values) {
     const Real c = segment.frame.cosine, s = segment.frame.sine;
-    const Vector at_i = to_node(structure.turned_axes(segment.i), c * f.along_i - s * f.across_i, s * f.along_i + c * f.across_i);
-    const Vector at_j = to_node(structure.turned_axes(segment.j), c * f.along_j - s * f.across_j, s * f.along_j + c * f.across_j);
+    const Vector at_i =
+        to_node(structure.turned_axes(segment.i), c * f.along_i - s * f.across_i, s * f.along_i + c * f.across_i);
+    const Vector at_j =
+        to_node(structure.turned_axes(segment.j), c * f.along_j - s * f.across_j, s * f.along_j + c * f.across_j);
     const int i = 3 * segment.i, j = 3 * segment.j;
     values[i] += factor * at_i.x;
     values[i + 1] += factor * at_i.y;
@@ -128,7 +131,8 @@ std::vector<Real> residual(const Structure& structure, const LoadVector& loads, 
 }
 
 void apply_stiffness(const Structure& structure, const std::vector<Real>& x, std::vector<Real>& y) {
-    for (int d = 0; d < structure.directions(); ++d) y[d] = structure.spring[d] == 0 ? Real(0) : structure.spring[d] * x[d];
+    for (int d = 0; d < structure.directions(); ++d)
+        y[d] = structure.spring[d] == 0 ? Real(0) : structure.spring[d] * x[d];
     for (const Segment& segment : structure.segments) {
         const BasicForces q = segment.stiffness * deformation(structure, segment, x);
         scatter(structure, segment, end_forces(q, nullptr), 1, y);

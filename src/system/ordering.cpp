@@ -50,9 +50,8 @@ void walk(const Graph& graph, int first, std::vector<char>& seen, std::vector<in
             seen[other] = 1;
             order.push_back(other);
         }
-        std::sort(order.begin() + static_cast<std::ptrdiff_t>(begin), order.end(), [&](int a, int b) {
-            return std::pair(graph.degree(a), a) < std::pair(graph.degree(b), b);
-        });
+        std::sort(order.begin() + static_cast<std::ptrdiff_t>(begin), order.end(),
+                  [&](int a, int b) { return std::pair(graph.degree(a), a) < std::pair(graph.degree(b), b); });
     }
 }
 

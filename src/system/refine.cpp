@@ -113,7 +113,8 @@ Refined refine(const Structure& structure, const Factor& factor, const SoftShape
     return best;
 }
 
-double scaled_condition(const Structure& structure, const BlockMatrix& matrix, const Factor& factor, const SoftShapes& soft) {
+double scaled_condition(const Structure& structure, const BlockMatrix& matrix, const Factor& factor,
+                        const SoftShapes& soft) {
     const std::size_t size = structure.directions();
     std::vector<double> root(size); // D^½
     for (std::size_t d = 0; d < size; ++d) root[d] = std::sqrt(matrix.diagonal[matrix.place_of[d / 3]][4 * (d % 3)]);

@@ -41,8 +41,10 @@ void add_segments(const Model& model, int index, Structure& structure) {
         segment.frame = whole;
         segment.frame.length = (last ? whole.length : Real(member.hinges[k])) - offset;
         if (k == 0) segment.frame.start = member.start;
-        if (last) segment.frame.end = member.end;
-        else segment.frame.end.moment.kind = Restraint::Kind::free;
+        if (last)
+            segment.frame.end = member.end;
+        else
+            segment.frame.end.moment.kind = Restraint::Kind::free;
         segment.stiffness = elements::basic_stiffness(segment.frame);
         offset += segment.frame.length;
         from = segment.j;
@@ -126,7 +128,8 @@ Point node_point(const Structure& structure, int node) {
     const Segment& segment = segment_before_hinge(structure, node);
     const Node& from = model.nodes[model.members[segment.member].from];
     const Real s = segment.offset + segment.frame.length;
-    return {static_cast<double>(from.x + s * segment.frame.cosine), static_cast<double>(from.y + s * segment.frame.sine)};
+    return {static_cast<double>(from.x + s * segment.frame.cosine),
+            static_cast<double>(from.y + s * segment.frame.sine)};
 }
 
 std::string node_name(const Structure& structure, int node) {

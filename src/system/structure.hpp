@@ -1,9 +1,9 @@
 #pragma once
 // The numbered structure: nodes with three directions each, segments between them, springs to the ground.
 //
-// Every node owns three directions (x, y, rotation), so that a direction's number is 3 node + c. A node with a turned support
-// has its x and y in the support's axes. A direction that a support fixes, or a rotation that nothing reaches, is inactive:
-// its movement is given (mostly 0) instead of solved for.
+// Every node owns three directions (x, y, rotation), so that a direction's number is 3 node + c. A node with a turned
+// support has its x and y in the support's axes. A direction that a support fixes, or a rotation that nothing reaches,
+// is inactive: its movement is given (mostly 0) instead of solved for.
 
 #include <string>
 #include <vector>

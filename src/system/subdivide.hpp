@@ -14,8 +14,8 @@ struct Subdivided {
     std::vector<int> first_part; ///< by segment of the original: its first part; one more at the end
 };
 
-/// Cuts every segment at the given places (distances from its start, rising, strictly inside). Nodes of the original keep
-/// their numbers.
+/// Cuts every segment at the given places (distances from its start, rising, strictly inside). Nodes of the original
+/// keep their numbers.
 Subdivided subdivide(const Structure& structure, const std::function<std::vector<Real>(int segment)>& places);
 
 } // namespace groundsill

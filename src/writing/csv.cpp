@@ -229,6 +229,47 @@ void write_envelopes(const Analysis& analysis, Rows& rows) {
     if (analysis.service) write_envelope(*analysis.model, LimitState::service, *analysis.service, rows);
 }
 
+void write_mode_figures(const Mode& mode, int number, Rows& rows) {
+    rows.cell(static_cast<double>(number));
+    rows.cell(mode.frequency);
+    rows.cell(mode.modal_mass);
+    rows.cell(mode.effective_x);
+    rows.cell(mode.effective_y);
+}
+
+/// One row a node, then one a place of each member.
+void write_modes(const Analysis& analysis, int places, Rows& rows) {
+    rows.header({"mode", "frequency [Hz]", "modal mass [kg]", "effective mass x [kg]", "effective mass y [kg]", "node",
+                 "x", "y", "rotation [rad/m]", "member", "at [m]", "along", "across"});
+    const Model& model = *analysis.model;
+    int number = 0;
+    for (const Mode& mode : analysis.vibration->modes) {
+        ++number;
+        for (std::size_t node = 0; node < model.nodes.size(); ++node) {
+            write_mode_figures(mode, number, rows);
+            rows.cell(model.nodes[node].name);
+            rows.cell(mode.nodes[node].x);
+            rows.cell(mode.nodes[node].y);
+            if (mode.nodes[node].rotation)
+                rows.cell(*mode.nodes[node].rotation);
+            else
+                rows.empty(1);
+            rows.empty(4);
+            rows.end();
+        }
+        for (std::size_t member = 0; places > 0 && member < model.members.size(); ++member)
+            for (const DiagramPlace& place : mode.members[member].places(places)) {
+                write_mode_figures(mode, number, rows);
+                rows.empty(4);
+                rows.cell(model.members[member].name);
+                rows.cell(place.at);
+                rows.cell(place.along);
+                rows.cell(place.across);
+                rows.end();
+            }
+    }
+}
+
 /// A file whose rows come from `write(rows)`.
 template <class Write> CsvFile file(std::string name, Write write) {
     return {std::move(name), [write](const Sink& sink) {
@@ -251,6 +292,8 @@ std::vector<CsvFile> csv_files(const Analysis& analysis, const WriteOptions& opt
     if (analysis.strength || analysis.service) {
         files.push_back(file("envelopes.csv", [a](Rows& rows) { write_envelopes(*a, rows); }));
     }
+    if (analysis.vibration)
+        files.push_back(file("modes.csv", [a, places](Rows& rows) { write_modes(*a, places, rows); }));
     return files;
 }
 

@@ -68,8 +68,7 @@ void write_member(JsonWriter& json, const Diagram& diagram, const WriteOptions& 
         json.close();
     }
     json.key("extremes").open_object();
-    for (const auto& [name, curve] : curves)
-        write_row(json.key(name), member_range(diagram, curve, rounding));
+    for (const auto& [name, curve] : curves) write_row(json.key(name), member_range(diagram, curve, rounding));
     json.close();
     json.close();
 }
@@ -197,11 +196,80 @@ void write_envelopes(JsonWriter& json, const Analysis& analysis) {
     json.close();
 }
 
+void write_place(JsonWriter& json, const Model& model, const Mode::Place& place) {
+    json.open_object_row();
+    if (place.node >= 0) {
+        json.key("node").string(model.nodes[place.node].name);
+    } else if (place.member >= 0) {
+        json.key("member").string(model.members[place.member].name);
+        json.key("at").number(place.at);
+    }
+    json.close();
+}
+
+void write_shape(JsonWriter& json, const Model& model, const Mode& mode, int places) {
+    json.open_object();
+    json.key("nodes").open_object();
+    for (std::size_t node = 0; node < model.nodes.size(); ++node) {
+        const Mode::NodeShape& shape = mode.nodes[node];
+        write_row(json.name(model.nodes[node].name), NodeMovement{shape.x, shape.y, shape.rotation});
+    }
+    json.close();
+    if (places > 0) {
+        json.key("members").open_object();
+        for (std::size_t member = 0; member < model.members.size(); ++member) {
+            json.name(model.members[member].name).open_array();
+            for (const DiagramPlace& place : mode.members[member].places(places)) {
+                json.open_object_row();
+                json.key("at").number(place.at);
+                json.key("along").number(place.along);
+                json.key("across").number(place.across);
+                json.close();
+            }
+            json.close();
+        }
+        json.close();
+    }
+    json.close();
+}
+
+void write_mode(JsonWriter& json, const Model& model, const Mode& mode, int places) {
+    json.open_object();
+    json.key("frequency").number(mode.frequency);
+    json.key("modal_mass").number(mode.modal_mass);
+    json.key("effective_mass").open_object_row();
+    json.key("x").number(mode.effective_x);
+    json.key("y").number(mode.effective_y);
+    json.close();
+    json.key("flexibility").open_array();
+    for (const Mode::Share& share : mode.flexibility) {
+        json.open_object_row();
+        if (share.member >= 0)
+            json.key("member").string(model.members[share.member].name);
+        else
+            json.key("support").string(node_of(model, model.supports[share.support]));
+        json.key("share").number(share.share);
+        json.close();
+    }
+    json.close();
+    write_place(json.key("largest"), model, mode.largest);
+    write_shape(json.key("shape"), model, mode, places);
+    json.close();
+}
+
+void write_modes(JsonWriter& json, const Analysis& analysis, int places) {
+    if (!analysis.vibration) return;
+    json.key("modes").open_array();
+    for (const Mode& mode : analysis.vibration->modes) write_mode(json, *analysis.model, mode, places);
+    json.close();
+}
+
 void write_diagnostics(JsonWriter& json, const Analysis& analysis) {
     json.key("diagnostics").open_object();
     json.key("equilibrium").number(analysis.verification.equilibrium);
     json.key("residual").number(analysis.verification.residual);
     json.key("condition").number(analysis.verification.condition);
+    if (analysis.vibration) json.key("modes_missed").number(analysis.vibration->modes_missed);
     json.key("warnings").open_array();
     for (const std::string& warning : analysis.warnings) json.string(warning);
     json.close();
@@ -221,6 +289,7 @@ void write_json(const Analysis& analysis, const WriteOptions& options, const Sin
     write_cases(json, analysis, options);
     write_combinations(json, analysis, options);
     write_envelopes(json, analysis);
+    write_modes(json, analysis, options.places);
     write_diagnostics(json, analysis);
     json.close();
     json.end_document();

@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <functional>
 
 #include <fmt/format.h>
 
@@ -181,6 +182,47 @@ std::string verification(const Analysis& analysis) {
                        small_number(figures.condition));
 }
 
+std::string place_of(const Model& model, const Display& display, const Mode::Place& place) {
+    if (place.node >= 0) return "node " + writing::printable(model.nodes[place.node].name);
+    if (place.member < 0) return "none";
+    return writing::printable(model.members[place.member].name) + " at " +
+           display.result_with_unit(Shown::length, place.at);
+}
+
+/// The two parts of the structure that hold the most strain energy of a mode: "70 % roof, 21 % support A".
+std::string softest_parts(const Model& model, const Mode& mode) {
+    std::vector<Mode::Share> shares = mode.flexibility;
+    std::ranges::stable_sort(shares, std::greater<>{}, &Mode::Share::share);
+    std::string text;
+    for (std::size_t k = 0; k < std::min<std::size_t>(2, shares.size()); ++k) {
+        if (shares[k].share < 0.005) break;
+        const std::string name =
+            shares[k].member >= 0
+                ? writing::printable(model.members[shares[k].member].name)
+                : "support " + writing::printable(writing::node_of(model, model.supports[shares[k].support]));
+        if (k > 0) text += ", ";
+        text += fmt::format("{:.0f} % {}", 100 * shares[k].share, name);
+    }
+    return text;
+}
+
+std::string mode_table(const Model& model, const Display& display, const Vibration& vibration) {
+    constexpr std::size_t most_modes = 10;
+    Table table({Align::left, Align::right, Align::right, Align::left, Align::left});
+    const bool metric = model.display == DisplayUnits::metric;
+    table.row({"mode", "Hz", metric ? "modal kg" : "modal lb", "moves most", "strain energy in"});
+    const double unit = metric ? 1 : 0.45359237; // the pound, exact by definition (1959)
+    for (std::size_t k = 0; k < std::min(most_modes, vibration.modes.size()); ++k) {
+        const Mode& mode = vibration.modes[k];
+        table.row({fmt::format("{}", k + 1), significant(mode.frequency), significant(mode.modal_mass / unit),
+                   place_of(model, display, mode.largest), softest_parts(model, mode)});
+    }
+    std::string text = table.text();
+    if (vibration.modes.size() > most_modes)
+        text += fmt::format("  ... and {} more, in the JSON and CSV files\n", vibration.modes.size() - most_modes);
+    return text;
+}
+
 constexpr std::string_view cautions = "Holds for the model as assumed; confirm ground and structure as built; local "
                                       "codes govern; a licensed engineer reviews and signs.\n"
                                       "Not checked: strength, deflections, buckling (lateral-torsional too), "
@@ -204,6 +246,8 @@ std::string summary_text(const Analysis& analysis, bool colour) {
             style.strong(fmt::format("Reactions, {} and {}", display.unit(Shown::force), display.unit(Shown::moment))) +
             '\n' + reaction_table(analysis, display, zero);
     }
+    if (analysis.vibration && !analysis.vibration->modes.empty())
+        text += '\n' + style.strong("Natural frequencies") + '\n' + mode_table(model, display, *analysis.vibration);
     text += '\n' + style.strong("Verified") + '\n' + verification(analysis);
     if (!analysis.warnings.empty())
         text += "  " + counted(analysis.warnings.size(), "warning", "warnings") + " on standard error.\n";
