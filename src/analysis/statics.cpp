@@ -20,13 +20,9 @@ namespace {
 
 /// A load in global axes turned into those of a node.
 void add_to_node(const Structure& structure, int node, Real x, Real y, Real moment, std::vector<Real>& nodal) {
-    if (const TurnedAxes* axes = structure.turned_axes(node)) {
-        const Real turned = axes->cosine * x + axes->sine * y;
-        y = -axes->sine * x + axes->cosine * y;
-        x = turned;
-    }
-    nodal[3 * node] += x;
-    nodal[3 * node + 1] += y;
+    const Vector force = to_node(structure.turned_axes(node), x, y);
+    nodal[3 * node] += force.x;
+    nodal[3 * node + 1] += force.y;
     nodal[3 * node + 2] += moment;
 }
 
@@ -80,22 +76,13 @@ Reaction reaction_of(const Structure& structure, const Support& support, const s
         if (restraints[c]->is_elastic()) force[c] = -restraints[c]->stiffness * ((u.high[d] - imposed[d]) + u.low[d]);
         force[c] = cleaned(force[c], noise * (c == 2 ? structure.size : Real(1)));
     }
-    if (const TurnedAxes* axes = structure.turned_axes(support.node)) {
-        const Real x = axes->cosine * force[0] - axes->sine * force[1];
-        force[1] = axes->sine * force[0] + axes->cosine * force[1];
-        force[0] = x;
-    }
-    return {static_cast<double>(force[0]), static_cast<double>(force[1]), static_cast<double>(force[2])};
+    const Vector global = to_global(structure.turned_axes(support.node), force[0], force[1]);
+    return {static_cast<double>(global.x), static_cast<double>(global.y), static_cast<double>(force[2])};
 }
 
 NodeMovement movement_of(const Structure& structure, int node, const Movements& u) {
-    Real x = u.value(3 * node), y = u.value(3 * node + 1);
-    if (const TurnedAxes* axes = structure.turned_axes(node)) {
-        const Real turned = axes->cosine * x - axes->sine * y;
-        y = axes->sine * x + axes->cosine * y;
-        x = turned;
-    }
-    NodeMovement movement{static_cast<double>(x), static_cast<double>(y), std::nullopt};
+    const Vector travel = to_global(structure.turned_axes(node), u.value(3 * node), u.value(3 * node + 1));
+    NodeMovement movement{static_cast<double>(travel.x), static_cast<double>(travel.y), std::nullopt};
     if (structure.has_rotation[node]) movement.rotation = static_cast<double>(u.value(3 * node + 2));
     return movement;
 }

@@ -76,14 +76,10 @@ void add_pull(const Structure& structure, const Segment& part, const elements::E
         std::vector<double>& pull = axis == 0 ? result.pull_x : result.pull_y;
         for (int end = 0; end < 2; ++end) {
             const int node = end == 0 ? part.i : part.j;
-            Real x = c * f[3 * end] - s * f[3 * end + 1], y = s * f[3 * end] + c * f[3 * end + 1];
-            if (const TurnedAxes* axes = structure.turned_axes(node)) {
-                const Real turned = axes->cosine * x + axes->sine * y;
-                y = -axes->sine * x + axes->cosine * y;
-                x = turned;
-            }
-            pull[3 * node] += static_cast<double>(x);
-            pull[3 * node + 1] += static_cast<double>(y);
+            const Vector force = to_node(structure.turned_axes(node), c * f[3 * end] - s * f[3 * end + 1],
+                                         s * f[3 * end] + c * f[3 * end + 1]);
+            pull[3 * node] += static_cast<double>(force.x);
+            pull[3 * node + 1] += static_cast<double>(force.y);
             pull[3 * node + 2] += static_cast<double>(f[3 * end + 2]);
         }
     }
@@ -91,12 +87,12 @@ void add_pull(const Structure& structure, const Segment& part, const elements::E
 
 void add_point(const Structure& structure, int node, double mass, VibratingStructure& result) {
     add_to_node(structure, node, mass, result.mass);
-    const TurnedAxes* axes = structure.turned_axes(node);
-    const double c = axes ? static_cast<double>(axes->cosine) : 1, s = axes ? static_cast<double>(axes->sine) : 0;
-    result.pull_x[3 * node] += mass * c;
-    result.pull_x[3 * node + 1] -= mass * s;
-    result.pull_y[3 * node] += mass * s;
-    result.pull_y[3 * node + 1] += mass * c;
+    const Vector along_x = to_node(structure.turned_axes(node), mass, 0);
+    const Vector along_y = to_node(structure.turned_axes(node), 0, mass);
+    result.pull_x[3 * node] += static_cast<double>(along_x.x);
+    result.pull_x[3 * node + 1] += static_cast<double>(along_x.y);
+    result.pull_y[3 * node] += static_cast<double>(along_y.x);
+    result.pull_y[3 * node + 1] += static_cast<double>(along_y.y);
 }
 
 /// The node of the fine structure at a place of a segment.
@@ -207,14 +203,8 @@ Mode make_mode(const VibratingStructure& vibrating, double lambda, const std::ve
     Mode mode;
     mode.frequency = rigid ? 0 : std::sqrt(std::max(lambda, 0.0)) / (2 * std::numbers::pi);
     for (int node = 0; node < static_cast<int>(model.nodes.size()); ++node) {
-        double x = vector[3 * node], y = vector[3 * node + 1];
-        if (const TurnedAxes* axes = fine.turned_axes(node)) {
-            const double c = static_cast<double>(axes->cosine), s = static_cast<double>(axes->sine);
-            const double turned = c * x - s * y;
-            y = s * x + c * y;
-            x = turned;
-        }
-        mode.nodes.push_back({x, y, std::nullopt});
+        const Vector travel = to_global(fine.turned_axes(node), vector[3 * node], vector[3 * node + 1]);
+        mode.nodes.push_back({static_cast<double>(travel.x), static_cast<double>(travel.y), std::nullopt});
         if (fine.has_rotation[node]) mode.nodes.back().rotation = vector[3 * node + 2];
     }
     mode.members = member_shapes(fine, u);

@@ -33,10 +33,8 @@ struct Movement {
 };
 
 Movement movement_of(const Structure& structure, const Shape& shape, int node) {
-    const Real a = shape[3 * node], b = shape[3 * node + 1], r = shape[3 * node + 2];
-    const TurnedAxes* axes = structure.turned_axes(node);
-    if (!axes) return {a, b, r};
-    return {axes->cosine * a - axes->sine * b, axes->sine * a + axes->cosine * b, r};
+    const Vector travel = to_global(structure.turned_axes(node), shape[3 * node], shape[3 * node + 1]);
+    return {travel.x, travel.y, shape[3 * node + 2]};
 }
 
 /// "along x", "along y", "along (0.60, 0.80)", "turn" or nothing for a node at rest.

@@ -12,22 +12,6 @@ using elements::State;
 
 namespace {
 
-/// x and y of a node in global axes, from values in the node's own axes.
-struct Vector {
-    Real x = 0;
-    Real y = 0;
-};
-
-Vector to_global(const TurnedAxes* axes, Real first, Real second) {
-    if (!axes) return {first, second};
-    return {axes->cosine * first - axes->sine * second, axes->sine * first + axes->cosine * second};
-}
-
-Vector to_node(const TurnedAxes* axes, Real x, Real y) {
-    if (!axes) return {x, y};
-    return {axes->cosine * x + axes->sine * y, -axes->sine * x + axes->cosine * y};
-}
-
 /// Chord deformations from the differences between the ends and the rotations there.
 Deformation deformation(const Segment& segment, Real dx, Real dy, Real rotation_i, Real rotation_j) {
     const elements::Frame& frame = segment.frame;

@@ -32,6 +32,24 @@ struct TurnedAxes {
     Real sine = 0;
 };
 
+/// Two components, in global axes or in those of a node.
+struct Vector {
+    Real x = 0;
+    Real y = 0;
+};
+
+/// Components in global axes from those in a node's own axes; null axes are the global ones.
+inline Vector to_global(const TurnedAxes* axes, Real first, Real second) {
+    if (!axes) return {first, second};
+    return {axes->cosine * first - axes->sine * second, axes->sine * first + axes->cosine * second};
+}
+
+/// Components in a node's own axes from those in global axes.
+inline Vector to_node(const TurnedAxes* axes, Real x, Real y) {
+    if (!axes) return {x, y};
+    return {axes->cosine * x + axes->sine * y, -axes->sine * x + axes->cosine * y};
+}
+
 struct Structure {
     const Model* model = nullptr;
     int node_count = 0;                      ///< hinges inside members included
