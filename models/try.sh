@@ -6,7 +6,7 @@
 set -eu
 cd "$(dirname -- "$0")/.."
 
-sh .ci/install_packages.sh cmake=cmake ninja=ninja-build g++=g++ libeigen3-dev libfmt-dev libtomlplusplus-dev \
+sh .ci/install_packages.sh cmake=cmake ninja=ninja-build g++=g++ libeigen3-dev libspectra-dev libfmt-dev libtomlplusplus-dev \
     libcli11-dev
 
 echo "Building groundsill in build/ (about two minutes the first time) ..."

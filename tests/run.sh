@@ -7,7 +7,7 @@ set -eu
 cd "$(dirname -- "$0")/.."
 
 sh .ci/install_packages.sh cmake=cmake ninja=ninja-build g++=g++ clang-format=clang-format clang-tidy=clang-tidy \
-    libeigen3-dev libfmt-dev libtomlplusplus-dev libcli11-dev doctest-dev nlohmann-json3-dev
+    libeigen3-dev libspectra-dev libfmt-dev libtomlplusplus-dev libcli11-dev doctest-dev nlohmann-json3-dev
 
 echo "== Format"
 find src include tests models -name '*.[ch]pp' -exec clang-format --dry-run --Werror {} +
