@@ -97,18 +97,14 @@ struct Analysis {
     std::optional<Envelope> service;
     std::optional<Vibration> vibration; ///< present where the model asks for it
     Verification verification;
-    std::vector<std::string> warnings;
+    std::vector<std::string> warnings; ///< what to mind about these results
 };
 
-/// Why a structure cannot be analysed: a mechanism, told by who moves and what lets it.
-struct Refusal {
-    std::string message;
-};
-
-/// Either the analysis or the reason why there is none.
+/// Either the analysis, or why there is none: a mechanism, told by who moves and what lets it, or numbers that cannot
+/// be solved.
 struct Outcome {
     std::optional<Analysis> analysis;
-    Refusal refusal;
+    Diagnostics refusals; ///< errors, with the place of what lets the structure move; empty when there is an analysis
 };
 
 /// Solves all cases and combinations of a model.

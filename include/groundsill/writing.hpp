@@ -20,6 +20,10 @@ struct WriteOptions {
 /// The results in JSON, SI units (the format: docs/results.md). Streamed: memory does not grow with the model.
 void write_json(const Analysis& analysis, const WriteOptions& options, const Sink& sink);
 
+/// The names of all CSV files that a run can write.
+inline constexpr const char* csv_names[] = {"reactions.csv", "displacements.csv", "members.csv",
+                                            "extremes.csv",  "envelopes.csv",     "modes.csv"};
+
 /// One CSV file: its name and how to write it.
 struct CsvFile {
     std::string name;

@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <initializer_list>
 #include <iterator>
 #include <stdexcept>
 
@@ -183,37 +184,85 @@ Response superpose(const std::vector<Response>& cases, const Combination& combin
 }
 
 /// A moment on a node that has no rotation has nothing to work against.
-std::string describe_lost_moment(const Structure& structure) {
+Diagnostics describe_lost_moments(const Structure& structure) {
+    Diagnostics found;
     for (const LoadCase& load_case : structure.model->cases)
         for (const NodeLoad& load : load_case.node_loads)
             if (load.moment != 0 && !structure.has_rotation[load.node])
-                return fmt::format(
-                    "the structure is a mechanism: the moment of case {} at node {} turns it freely. What lets it: "
-                    "every member there is released in moment and no support holds the rotation. Put the "
-                    "moment on a member, or take one release away.",
-                    load_case.name, node_name(structure, load.node));
+                found.push_back(
+                    {Diagnostic::Severity::error, load_case.position,
+                     fmt::format(
+                         "the structure is a mechanism: the moment of case {} at node {} turns it freely. What lets "
+                         "it: every "
+                         "member there is released in moment and no support holds the rotation. Put the moment on a "
+                         "member, or take one release away.",
+                         load_case.name, node_name(structure, load.node))});
+    return found;
+}
+
+/// Most mechanisms that are told one by one.
+constexpr std::size_t most_told = 5;
+
+Diagnostics describe_all(const Structure& structure, const std::vector<Shape>& mechanisms) {
+    Diagnostics found;
+    for (std::size_t k = 0; k < std::min(mechanisms.size(), most_told); ++k)
+        found.push_back(describe_mechanism(structure, mechanisms[k]));
+    if (mechanisms.size() > most_told)
+        found.back().message += fmt::format(" It has {} more ways to move.", mechanisms.size() - most_told);
+    return found;
+}
+
+/// Why the structure cannot stand; nothing when it can.
+Diagnostics find_refusals(const Structure& structure) {
+    Diagnostics found = describe_self_mechanisms(structure);
+    if (found.empty()) found = describe_lost_moments(structure);
+    return found;
+}
+
+bool is_finite(const Response& response) {
+    const auto all = [](std::initializer_list<double> values) {
+        return std::all_of(values.begin(), values.end(), [](double value) { return std::isfinite(value); });
+    };
+    return std::ranges::all_of(response.movements,
+                               [&](const NodeMovement& u) {
+                                   return all({u.x, u.y, u.rotation.value_or(0)});
+                               }) &&
+           std::ranges::all_of(response.reactions,
+                               [&](const Reaction& r) {
+                                   return all({r.x, r.y, r.moment});
+                               }) &&
+           std::ranges::all_of(response.segments, [&](const SegmentState& s) {
+               return all({s.N, s.V, s.M, s.along, s.across, s.rotation});
+           });
+}
+
+/// Largest relative residual that still is an answer; a thousandth of it is warned of.
+constexpr double largest_residual = 1e-6;
+
+/// Results that are none: numbers out of range, or a solution that does not balance its loads.
+Diagnostics find_failures(const Analysis& analysis) {
+    const auto refuse = [](std::string message) {
+        return Diagnostics{{Diagnostic::Severity::error, {}, std::move(message)}};
+    };
+    if (!std::ranges::all_of(analysis.cases, is_finite) || !std::ranges::all_of(analysis.combinations, is_finite))
+        return refuse("the results are beyond what numbers can hold: check the units of lengths, stiffnesses, loads "
+                      "and factors.");
+    if (analysis.verification.residual > largest_residual)
+        return refuse(fmt::format(
+            "the structure cannot be solved: its stiffnesses differ so much that {:.1e} of the forces is left "
+            "unbalanced; check for members that are extremely short or stiff, and for slips of units.",
+            analysis.verification.residual));
     return {};
 }
 
-std::string describe_all(const Structure& structure, const std::vector<Shape>& mechanisms) {
-    constexpr std::size_t most_told = 5;
-    std::string text;
-    for (std::size_t k = 0; k < std::min(mechanisms.size(), most_told); ++k) {
-        if (k > 0) text += '\n';
-        text += describe_mechanism(structure, mechanisms[k]);
-    }
-    if (mechanisms.size() > most_told)
-        text += fmt::format("\nand {} more ways to move.", mechanisms.size() - most_told);
-    return text;
-}
-
 void warn(Analysis& analysis) {
-    if (analysis.verification.residual > 1e-9)
+    if (analysis.verification.residual > largest_residual / 1000)
         analysis.warnings.push_back(
             fmt::format("the residual of {:.1e} is larger than round-off: stiffnesses differ so much that "
                         "small forces may be wrong; check members and springs for slips of units.",
                         analysis.verification.residual));
-    if (analysis.verification.condition > 1e13)
+    // many short parts have a large condition number too, but they balance to round-off
+    if (analysis.verification.condition > 1e13 && analysis.verification.residual > 1e-12)
         analysis.warnings.push_back(
             fmt::format("the stiffness is badly conditioned ({:.1e}): the structure is close to a "
                         "mechanism; check for nearly free directions.",
@@ -226,15 +275,14 @@ Outcome analyse(const Model& model) {
     Outcome outcome;
     const auto internals = std::make_shared<Internals>(Internals{number_structure(model), CaseLoads(model)});
     const Structure& structure = internals->structure;
-    outcome.refusal.message = describe_self_mechanisms(structure);
-    if (outcome.refusal.message.empty()) outcome.refusal.message = describe_lost_moment(structure);
-    if (!outcome.refusal.message.empty()) return outcome;
+    outcome.refusals = find_refusals(structure);
+    if (!outcome.refusals.empty()) return outcome;
 
     const BlockMatrix matrix = assemble(structure);
     const Factor factor(matrix);
     const MechanismSearch search = find_mechanisms(structure, matrix, factor);
     if (!search.mechanisms.empty()) {
-        outcome.refusal.message = describe_all(structure, search.mechanisms);
+        outcome.refusals = describe_all(structure, search.mechanisms);
         return outcome;
     }
     Analysis analysis;
@@ -245,6 +293,8 @@ Outcome analyse(const Model& model) {
     for (const Combination& combination : model.combinations)
         analysis.combinations.push_back(superpose(analysis.cases, combination));
     analysis.verification.condition = scaled_condition(structure, matrix, factor, search.soft);
+    outcome.refusals = find_failures(analysis);
+    if (!outcome.refusals.empty()) return outcome;
     analysis.strength = envelope(analysis, LimitState::strength);
     analysis.service = envelope(analysis, LimitState::service);
     warn(analysis);
@@ -252,7 +302,7 @@ Outcome analyse(const Model& model) {
         try {
             analysis.vibration = find_modes(*internals, *model.mass, false);
         } catch (const std::runtime_error& error) {
-            outcome.refusal.message = error.what();
+            outcome.refusals.push_back({Diagnostic::Severity::error, model.mass->position, error.what()});
             return outcome;
         }
         std::ranges::copy(analysis.vibration->warnings, std::back_inserter(analysis.warnings));

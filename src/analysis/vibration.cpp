@@ -18,22 +18,38 @@ namespace {
 /// 1e-6.
 constexpr double wave = 0.2;
 
-/// Every loaded segment has at least so many parts: its shape between the nodes must be seen even where it is stiff.
-constexpr int fewest_parts = 2;
+/// Error in frequency that is allowed to the shapes along the axis and to shear, whose slopes are constant in a part:
+/// each errs by (kh)²/24 of its share of the mode's strain energy, k the wave number.
+constexpr double straight_error = 1e-5;
 
 /// Most parts of one segment; a wave that short is of no structural interest.
 constexpr int most_parts = 200;
 
-int parts_of(const Segment& segment, const SegmentLoadMass& mass, double omega) {
-    Real total = 0;
-    for (const elements::MassLine& line : mass.spread.lines) total += (line.ma + line.mb) / 2 * (line.b - line.a);
-    const Real density = total / segment.frame.length;
+/// Mass per length where it is densest, or a little more where line loads do not overlap.
+Real densest(const SegmentLoadMass& mass) {
+    Real density = 0;
+    for (const elements::MassLine& line : mass.spread.lines) density += std::max(line.ma, line.mb);
+    return density;
+}
+
+/// Wave numbers of bending, (m ω² /EI)^¼, and along the axis, (m ω²/EA)^½; 1/m.
+struct WaveNumbers {
+    Real bending = 0;
+    Real axial = 0;
+};
+
+WaveNumbers wave_numbers(const Segment& segment, Real density, Real omega) {
+    return {std::pow(density * omega * omega * segment.frame.bending_flexibility, Real(0.25)),
+            std::sqrt(density * segment.frame.axial_flexibility) * omega};
+}
+
+int parts_of(const Segment& segment, const SegmentLoadMass& mass, const Fineness& fineness, int index) {
+    const Real density = densest(mass);
     if (!(density > 0)) return 1;
-    const Real bending = std::pow(density * Real(omega) * omega * segment.frame.bending_flexibility, Real(0.25));
-    // along the axis the error is of fourth order too, (κh)⁴/480 with κ² = m ω²/(E A)
-    const Real axial = std::sqrt(density * segment.frame.axial_flexibility) * Real(omega);
-    const Real wanted = std::ceil(std::max(bending, axial) * segment.frame.length / Real(wave));
-    return static_cast<int>(std::clamp(wanted, Real(fewest_parts), Real(most_parts)));
+    const WaveNumbers waves = wave_numbers(segment, density, fineness.circular_frequency);
+    Real finest = std::max(waves.bending, waves.axial) / Real(wave);
+    if (!fineness.per_segment.empty()) finest = std::max(finest, Real(fineness.per_segment[index]));
+    return static_cast<int>(std::clamp(std::ceil(finest * segment.frame.length), Real(1), Real(most_parts)));
 }
 
 /// Places at which a segment is cut: evenly, and at its point masses.
@@ -195,11 +211,16 @@ std::vector<Mode::Share> flexibility_shares(const Structure& fine, const Movemen
     return shares;
 }
 
+Movements movements_of(const std::vector<double>& vector) {
+    Movements u(static_cast<int>(vector.size()));
+    std::copy(vector.begin(), vector.end(), u.high.begin());
+    return u;
+}
+
 Mode make_mode(const VibratingStructure& vibrating, double lambda, const std::vector<double>& vector, bool rigid) {
     const Structure& fine = vibrating.fine.structure;
     const Model& model = *fine.model;
-    Movements u(fine.directions());
-    std::copy(vector.begin(), vector.end(), u.high.begin());
+    const Movements u = movements_of(vector);
     Mode mode;
     mode.frequency = rigid ? 0 : std::sqrt(std::max(lambda, 0.0)) / (2 * std::numbers::pi);
     for (int node = 0; node < static_cast<int>(model.nodes.size()); ++node) {
@@ -234,13 +255,13 @@ Mode make_mode(const VibratingStructure& vibrating, double lambda, const std::ve
 
 } // namespace
 
-VibratingStructure cut_for(const Internals& internals, const MassModel& mass, double omega) {
+VibratingStructure cut_for(const Internals& internals, const MassModel& mass, const Fineness& fineness) {
     const Structure& structure = internals.structure;
     std::vector<SegmentLoadMass> masses;
     for (const Segment& segment : structure.segments) masses.push_back(mass_of_segment(internals, mass, segment));
     VibratingStructure result;
     result.fine = subdivide(structure, [&](int k) {
-        return cut_places(structure.segments[k], masses[k], parts_of(structure.segments[k], masses[k], omega));
+        return cut_places(structure.segments[k], masses[k], parts_of(structure.segments[k], masses[k], fineness, k));
     });
     const Structure& fine = result.fine.structure;
     result.stiffness = assemble(fine);
@@ -265,19 +286,64 @@ VibratingStructure cut_for(const Internals& internals, const MassModel& mass, do
     return result;
 }
 
+namespace {
+
+/// Strain energies of one mode in a segment, along the axis and from shear.
+struct StraightEnergies {
+    Real axial = 0;
+    Real shear = 0;
+};
+
+StraightEnergies straight_energies(const VibratingStructure& vibrating, int segment, const Movements& u) {
+    const Structure& fine = vibrating.fine.structure;
+    StraightEnergies energies;
+    for (int part = vibrating.fine.first_part[segment]; part < vibrating.fine.first_part[segment + 1]; ++part) {
+        const elements::BasicForces q = basic_forces(fine, fine.segments[part], u);
+        const elements::Frame& frame = fine.segments[part].frame;
+        energies.axial += q.N * q.N * frame.length * frame.axial_flexibility;
+        energies.shear += q.V * q.V * frame.length * frame.shear_flexibility;
+    }
+    return energies;
+}
+
+/// The cut that the modes found so far ask for.
+Fineness fineness_for(const Internals& internals, const MassModel& mass, const VibratingStructure& vibrating,
+                      const EigenPairs& pairs) {
+    const Structure& structure = internals.structure;
+    Fineness fineness;
+    fineness.circular_frequency = std::sqrt(std::max(pairs.values.back(), 0.0));
+    fineness.per_segment.assign(structure.segments.size(), 0);
+    std::vector<Real> densities;
+    for (const Segment& segment : structure.segments)
+        densities.push_back(densest(mass_of_segment(internals, mass, segment)));
+    for (std::size_t mode = 0; mode < pairs.values.size(); ++mode) {
+        if (!(pairs.values[mode] > 0)) continue;
+        const Movements u = movements_of(pairs.vectors[mode]);
+        // φᵀ K φ = λ, as φᵀ M φ = 1
+        const Real scale = 24 * Real(straight_error) * pairs.values[mode];
+        for (int k = 0; k < static_cast<int>(structure.segments.size()); ++k) {
+            const StraightEnergies energies = straight_energies(vibrating, k, u);
+            const WaveNumbers waves =
+                wave_numbers(structure.segments[k], densities[k], std::sqrt(Real(pairs.values[mode])));
+            const Real finest = std::max(waves.axial * std::sqrt(energies.axial / scale),
+                                         waves.bending * std::sqrt(energies.shear / scale));
+            fineness.per_segment[k] = std::max(fineness.per_segment[k], static_cast<double>(finest));
+        }
+    }
+    return fineness;
+}
+
+} // namespace
+
 Vibration find_modes(const Internals& internals, const MassModel& mass, bool is_free) {
-    VibratingStructure vibrating = cut_for(internals, mass, 0);
+    VibratingStructure vibrating = cut_for(internals, mass, {});
     EigenPairs pairs;
-    double fits = 0;
     for (int round = 0; round < 6; ++round) {
         pairs = lowest_modes(vibrating.fine.structure, vibrating.stiffness, vibrating.mass, mass.modes, is_free);
         if (pairs.values.empty()) break;
-        const double omega = std::sqrt(std::max(pairs.values.back(), 0.0));
-        // the parts must fit the highest mode; its own estimate can only fall as they get shorter
-        if (omega <= fits) break;
-        fits = omega;
-        VibratingStructure finer = cut_for(internals, mass, fits);
-        if (finer.fine.structure.node_count == vibrating.fine.structure.node_count) break;
+        VibratingStructure finer = cut_for(internals, mass, fineness_for(internals, mass, vibrating, pairs));
+        // the frequencies can only fall as parts get shorter: a cut that is no finer will do
+        if (finer.fine.structure.node_count <= vibrating.fine.structure.node_count) break;
         vibrating = std::move(finer);
     }
     Vibration result;

@@ -1,5 +1,6 @@
 #include "cli/commands.hpp"
 
+#include <algorithm>
 #include <cerrno>
 #include <cstdlib>
 #include <cstring>
@@ -32,41 +33,66 @@ bool colour_for(int descriptor) {
     return isatty(descriptor) && !(off && *off) && !(terminal && std::strcmp(terminal, "dumb") == 0);
 }
 
-/// The text of a file; empty after telling why it cannot be read.
+/// The text of a file or pipe; empty after telling why it cannot be read.
 std::optional<std::string> text_of(const std::string& path) {
     std::error_code error;
     if (std::filesystem::is_directory(path, error)) {
         complain(fmt::format("{}: error: this is a directory; name a model file", path));
         return std::nullopt;
     }
-    std::ifstream file(path, std::ios::binary | std::ios::ate);
-    if (!file) {
+    std::ifstream file(path, std::ios::binary);
+    std::string text;
+    if (file && std::filesystem::is_regular_file(path, error)) {
+        text.resize(std::filesystem::file_size(path, error));
+        file.read(text.data(), static_cast<std::streamsize>(text.size()));
+        text.resize(static_cast<std::size_t>(file.gcount()));
+    } else if (file) {
+        text.assign(std::istreambuf_iterator<char>(file), {});
+    }
+    if (!file && !file.eof()) {
         complain(fmt::format("{}: error: cannot be read: {}", path, std::strerror(errno)));
         return std::nullopt;
-    }
-    std::string text;
-    const std::streamoff size = file.tellg();
-    if (size > 0) text.resize(static_cast<std::size_t>(size));
-    file.seekg(0);
-    file.read(text.data(), static_cast<std::streamsize>(text.size()));
-    if (!file.good() || file.peek() != std::char_traits<char>::eof()) {
-        // not a plain file, whose size says nothing: take what comes
-        file.clear();
-        file.seekg(0);
-        file.clear();
-        text.assign(std::istreambuf_iterator<char>(file), {});
     }
     return text;
 }
 
+/// A model with the text that it was read from.
+struct ModelFile {
+    std::string path;
+    std::string text;
+    ReadResult read;
+
+    void tell(const Diagnostics& diagnostics) const {
+        if (!diagnostics.empty())
+            fmt::print(stderr, "{}", describe(diagnostics, path, text, colour_for(STDERR_FILENO)));
+    }
+};
+
 /// The model of a file; empty after telling what is wrong with it. Warnings are told too.
-std::optional<Model> model_of(const std::string& path) {
-    const std::optional<std::string> text = text_of(path);
+std::optional<ModelFile> model_of(const std::string& path) {
+    std::optional<std::string> text = text_of(path);
     if (!text) return std::nullopt;
-    ReadResult read = read_model(*text);
-    if (!read.diagnostics.empty())
-        fmt::print(stderr, "{}", describe(read.diagnostics, path, *text, colour_for(STDERR_FILENO)));
-    return std::move(read.model);
+    ModelFile file{path, std::move(*text), {}};
+    file.read = read_model(file.text);
+    file.tell(file.read.diagnostics);
+    if (!file.read.model) return std::nullopt;
+    return file;
+}
+
+/// True when an output would fall on the model itself.
+bool is_the_model(const std::string& output, const std::string& model) {
+    std::error_code error;
+    return std::filesystem::equivalent(output, model, error);
+}
+
+/// Why the names of the outputs cannot be meant; empty when they can.
+std::string wrong_outputs(const RunOptions& options) {
+    if (options.json && options.json->empty()) return "--json needs the name of a file, or - for the standard output";
+    if (options.csv && options.csv->empty()) return "--csv needs the name of a directory";
+    if (options.csv == "-") return "--csv writes several files: it needs the name of a directory";
+    if (options.json && is_the_model(*options.json, options.model))
+        return fmt::format("--json would write over the model {}: name another file", options.model);
+    return {};
 }
 
 std::filesystem::path directory_of(const std::string& csv) {
@@ -77,50 +103,79 @@ std::filesystem::path directory_of(const std::string& csv) {
     return csv;
 }
 
+/// Writes the CSV files; each waits for its commit.
+std::vector<OutputFile> write_csv(const Analysis& analysis, const WriteOptions& options, const std::string& csv) {
+    const std::filesystem::path directory = directory_of(csv);
+    std::vector<OutputFile> files;
+    for (const CsvFile& file : csv_files(analysis, options)) {
+        files.emplace_back(directory / file.name);
+        file.write(files.back().sink());
+    }
+    return files;
+}
+
+/// Tells of CSV files that this program writes, lie in the directory and are not of this run.
+void tell_stale(const Analysis& analysis, const WriteOptions& options, const std::string& csv) {
+    const std::vector<CsvFile> written = csv_files(analysis, options);
+    for (const char* name : csv_names)
+        if (std::ranges::none_of(written, [&](const CsvFile& file) { return file.name == name; }) &&
+            std::filesystem::exists(std::filesystem::path(csv) / name))
+            complain(fmt::format("{}/{}: warning: this file is from an earlier run; the model as it is now has none",
+                                 csv, name));
+}
+
+/// Everything that was asked for: files first, beside their places, then the text, then the files into their places, so
+/// that nothing is left behind when anything cannot be written.
 void write_outputs(const Analysis& analysis, const RunOptions& options, std::optional<OutputFile>& json) {
     const WriteOptions write_options{options.places};
-    if (options.json == "-") write_json(analysis, write_options, standard_output());
+    const bool text = options.json != "-";
+    // the summary looks through all diagrams, and so do the files: both at once
+    std::future<std::string> summary;
+    if (text) summary = std::async(std::launch::async, summary_text, std::cref(analysis), colour_for(STDOUT_FILENO));
     if (json) write_json(analysis, write_options, json->sink());
     std::vector<OutputFile> csv;
-    if (!options.csv.empty()) {
-        const std::filesystem::path directory = directory_of(options.csv);
-        for (const CsvFile& file : csv_files(analysis, write_options)) {
-            csv.emplace_back(directory / file.name);
-            file.write(csv.back().sink());
-        }
-    }
+    if (options.csv) csv = write_csv(analysis, write_options, *options.csv);
+    if (text)
+        standard_output()(summary.get());
+    else
+        write_json(analysis, write_options, standard_output());
+    finish_standard_output();
     if (json) json->commit();
     for (OutputFile& file : csv) file.commit();
+    if (options.csv) tell_stale(analysis, write_options, *options.csv);
 }
 
 } // namespace
 
 int run_command(const RunOptions& options) {
+    if (const std::string wrong = wrong_outputs(options); !wrong.empty()) {
+        complain("error: " + wrong);
+        return exit_wrong_input;
+    }
+    std::optional<ModelFile> file = model_of(options.model);
+    if (!file) return exit_wrong_input;
     std::optional<OutputFile> json;
-    const std::optional<Model> model = model_of(options.model);
-    if (!model) return exit_wrong_input;
-    if (!options.json.empty() && options.json != "-") json.emplace(options.json);
-    const Outcome outcome = analyse(*model);
+    if (options.json && options.json != "-") json.emplace(*options.json);
+    Outcome outcome = analyse(*file->read.model);
     if (!outcome.analysis) {
-        complain(fmt::format("{}: error: {}", options.model, outcome.refusal.message));
+        file->tell(outcome.refusals);
         return exit_cannot_stand;
     }
-    for (const std::string& warning : outcome.analysis->warnings)
+    Analysis& analysis = *outcome.analysis;
+    for (const std::string& warning : analysis.warnings)
         complain(fmt::format("{}: warning: {}", options.model, warning));
-    // the summary looks through all diagrams, and so do the files: both at once
-    std::future<std::string> summary;
-    if (options.json != "-")
-        summary = std::async(std::launch::async, summary_text, std::cref(*outcome.analysis), colour_for(STDOUT_FILENO));
-    write_outputs(*outcome.analysis, options, json);
-    if (summary.valid()) standard_output()(summary.get());
-    finish_standard_output();
+    // what reading warned of goes into the results, too
+    std::vector<std::string> warnings;
+    for (const Diagnostic& diagnostic : file->read.diagnostics) warnings.push_back(diagnostic.message);
+    analysis.warnings.insert(analysis.warnings.begin(), warnings.begin(), warnings.end());
+    write_outputs(analysis, options, json);
     return exit_ok;
 }
 
 int sketch_command(const std::string& path) {
-    const std::optional<Model> model = model_of(path);
-    if (!model) return exit_wrong_input;
-    standard_output()(sketch_text(*model));
+    const std::optional<ModelFile> file = model_of(path);
+    if (!file) return exit_wrong_input;
+    standard_output()(sketch_text(*file->read.model));
     finish_standard_output();
     return exit_ok;
 }

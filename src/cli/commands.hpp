@@ -1,14 +1,15 @@
 #pragma once
 // The commands, each from its options to an exit code.
 
+#include <optional>
 #include <string>
 
 namespace groundsill::cli {
 
 struct RunOptions {
     std::string model;
-    std::string json; ///< a file, "-" for the standard output, or empty
-    std::string csv;  ///< a directory, or empty
+    std::optional<std::string> json; ///< a file, or "-" for the standard output
+    std::optional<std::string> csv;  ///< a directory
     int places = 20;
 };
 

@@ -1,6 +1,7 @@
 // Options in, exit code out.
 
 #include <exception>
+#include <iostream>
 
 #include <malloc.h>
 
@@ -86,7 +87,8 @@ int main(int argc, char** argv) {
     try {
         line.app.parse(argc, argv);
     } catch (const CLI::ParseError& error) {
-        return line.app.exit(error) == 0 ? exit_ok : exit_wrong_input;
+        if (line.app.exit(error) != 0) return exit_wrong_input;
+        return std::cout.flush() ? exit_ok : exit_output;
     }
     try {
         watch_for_interruption();

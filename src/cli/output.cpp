@@ -70,6 +70,9 @@ std::FILE* open_beside(const std::filesystem::path& place, std::filesystem::path
 
 OutputFile::OutputFile(std::filesystem::path place) : place_(std::move(place)) {
     std::error_code ignored;
+    // through a link the file that it names is replaced, not the link
+    if (std::filesystem::is_symlink(place_, ignored) && std::filesystem::exists(place_, ignored))
+        place_ = std::filesystem::canonical(place_, ignored);
     const auto status = std::filesystem::status(place_, ignored);
     if (std::filesystem::is_directory(status)) {
         errno = EISDIR;

@@ -271,6 +271,16 @@ void place_start(const Frame& frame, const Loading& loading, const State& node_i
     start.across = by_start ? across_i : across_j - free_end.across - start.rotation * L;
 }
 
+namespace {
+
+/// a + b, or 0 where that is the rounding of two doubles: a temperature that is held bends and stretches nothing.
+Real held_sum(Real a, Real b) {
+    const Real sum = a + b;
+    return std::abs(sum) < Real(4e-16) * (std::abs(a) + std::abs(b)) ? Real(0) : sum;
+}
+
+} // namespace
+
 void append_diagram(const Frame& frame, const Loading& loading, const State& start, double offset,
                     std::vector<DiagramPiece>& pieces) {
     const auto d = [](Real value) { return static_cast<double>(value); };
@@ -286,10 +296,10 @@ void append_diagram(const Frame& frame, const Loading& loading, const State& sta
         piece.N = {d(at.N), d(-load.p0), d(-load.p1 / 2)};
         piece.V = {d(at.V), d(q0), d(q1 / 2)};
         piece.M = {d(at.M), d(at.V), d(q0 / 2), d(q1 / 6)};
-        piece.along = {d(at.along), d(at.N * a + loading.strain), d(-load.p0 * a / 2), d(-load.p1 * a / 6)};
+        piece.along = {d(at.along), d(held_sum(at.N * a, loading.strain)), d(-load.p0 * a / 2), d(-load.p1 * a / 6)};
         piece.across = {d(at.across),
                         d(at.rotation - at.V * g),
-                        d((at.M * f + loading.curvature - q0 * g) / 2),
+                        d((held_sum(at.M * f, loading.curvature) - q0 * g) / 2),
                         d((at.V * f - q1 * g) / 6),
                         d(q0 * f / 24),
                         d(q1 * f / 120)};

@@ -47,8 +47,7 @@ void add_mass(const Shapes& shapes, Real dm, EndMatrix& M) {
     for (int i = 0; i < 6; ++i) {
         for (int j = 0; j < 6; ++j)
             M[6 * i + j] +=
-                static_cast<double>(dm * (shapes.along[i] * shapes.along[j] / 2 + shapes.across[i] * shapes.across[j]));
-        if (i % 3 == 0) M[7 * i] += static_cast<double>(dm * shapes.along[i] / 2);
+                static_cast<double>(dm * (shapes.along[i] * shapes.along[j] + shapes.across[i] * shapes.across[j]));
     }
 }
 

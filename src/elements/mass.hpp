@@ -24,9 +24,7 @@ struct SegmentMass {
 using EndMatrix = std::array<double, 36>;
 
 /// Consistent mass (Archer 1963): ∫ m φᵢ φⱼ + ∫ ρI θᵢ θⱼ over the shapes that unit movements of the nodes give the
-/// segment, releases and shear flexibility included. Along the axis the mean of consistent and lumped mass is taken,
-/// whose frequency error is of fourth order in the element length instead of second (Goudreau and Taylor 1972, from
-/// memory; tested by refining).
+/// segment, releases and shear flexibility included.
 EndMatrix consistent_mass(const Frame& frame, const BasicStiffness& stiffness, const SegmentMass& mass);
 
 /// The state at the start of a segment whose nodes move, without loads.

@@ -165,7 +165,7 @@ ShapeDimensions read_dimensions(Fields& fields, const ShapeKeys& shape, std::str
     std::string_view separator = " ";
     for (const std::string_view key : shape.keys) {
         if (key == "root" && fields.find(key) == nullptr) continue;
-        const std::string advice = fmt::format(", which a {} needs", shape.shape);
+        const std::string advice = fmt::format(", which {} {} needs", shape.shape == "i" ? "an" : "a", shape.shape);
         *dimension_of(dimensions, key) = fields.required_number(key, advice);
         if (const Field* field = fields.sound_field(key))
             description.append(separator).append(as_written(field->node()));
@@ -217,8 +217,9 @@ void read_designation(Fields& fields, const Field& field, Section& section) {
     const Designation* designation = find_designation(name);
     if (designation == nullptr) {
         const std::string nearest = fmt::format("{}", fmt::join(nearest_designations(name), ", "));
-        fields.error(field, fmt::format("names \"{}\", which is not in the tables{}{}; `groundsill sections` lists them", name,
-                                        nearest.empty() ? "" : ": did you mean ", nearest));
+        fields.error(field,
+                     fmt::format("names \"{}\", which is not in the tables{}{}; `groundsill sections` lists them", name,
+                                 nearest.empty() ? "" : ": did you mean ", nearest));
         return;
     }
     section.description = designation->name;
@@ -254,7 +255,9 @@ Section read_section(Draft& draft, const NamedEntry& entry) {
     fields.at_most_one({"shape", "designation"});
     const Field* shape = fields.find("shape");
     const Field* designation = fields.find("designation");
-    if (shape != nullptr && shape->sound)
+    if (shape != nullptr && designation != nullptr)
+        draft.mark_unsound(entry.field.position()); // told by at_most_one
+    else if (shape != nullptr && shape->sound)
         read_shape(fields, *shape, section);
     else if (designation != nullptr && designation->sound)
         read_designation(fields, *designation, section);

@@ -53,6 +53,12 @@ struct Moving {
     std::vector<std::string> nodes;
 };
 
+/// Something that lets a mechanism move, and where the file says so.
+struct Freedom {
+    std::string text;
+    Position position;
+};
+
 /// Nodes that move, grouped by direction in the order in which they come.
 std::vector<Moving> moving_nodes(const Structure& structure, const Shape& shape, Real largest) {
     std::vector<Moving> groups;
@@ -95,7 +101,7 @@ std::vector<std::string> moving_members(const Structure& structure, const Shape&
 
 /// Free releases of a segment that open in a shape which puts no force on it.
 void add_open_releases(const Structure& structure, const Segment& segment, const Shape& shape, Real largest,
-                       std::vector<std::string>& freedoms) {
+                       std::vector<Freedom>& freedoms) {
     Movements u(structure.directions());
     u.high = shape;
     const elements::State at_i = end_state(structure, segment, false, u), at_j = end_state(structure, segment, true, u);
@@ -104,28 +110,27 @@ void add_open_releases(const Structure& structure, const Segment& segment, const
     elements::State start;
     elements::place_start(segment.frame, none, at_i, at_j, start);
     const elements::State end = elements::integrate(segment.frame, none, start);
-    const std::string& member = structure.model->members[segment.member].name;
+    const Member& member = structure.model->members[segment.member];
     const auto check = [&](const Restraint& restraint, Real gap, const char* what, const char* where) {
         if (restraint.is_free() && std::abs(gap) > still * largest)
-            freedoms.push_back(fmt::format("{} is released in {} at its {}", member, what, where));
+            freedoms.push_back({fmt::format("{} is released {} at its {}", member.name, what, where), member.position});
     };
     const Real L = segment.frame.length;
-    check(segment.frame.start.axial, start.along - at_i.along, "axial", "start");
-    check(segment.frame.start.shear, start.across - at_i.across, "shear", "start");
+    check(segment.frame.start.axial, start.along - at_i.along, "axially", "start");
+    check(segment.frame.start.shear, start.across - at_i.across, "in shear", "start");
     if (segment.i < static_cast<int>(structure.model->nodes.size()))
-        check(segment.frame.start.moment, (start.rotation - at_i.rotation) * L, "moment", "start");
-    check(segment.frame.end.axial, end.along - at_j.along, "axial", "end");
-    check(segment.frame.end.shear, end.across - at_j.across, "shear", "end");
+        check(segment.frame.start.moment, (start.rotation - at_i.rotation) * L, "in moment", "start");
+    check(segment.frame.end.axial, end.along - at_j.along, "axially", "end");
+    check(segment.frame.end.shear, end.across - at_j.across, "in shear", "end");
     if (segment.j < static_cast<int>(structure.model->nodes.size())) {
-        check(segment.frame.end.moment, (end.rotation - at_j.rotation) * L, "moment", "end");
+        check(segment.frame.end.moment, (end.rotation - at_j.rotation) * L, "in moment", "end");
     } else if (std::abs(end.rotation - at_j.rotation) * L > still * largest) {
-        freedoms.push_back(fmt::format("{} opens", node_name(structure, segment.j)));
+        freedoms.push_back({fmt::format("{} opens", node_name(structure, segment.j)), member.position});
     }
 }
 
 /// Directions that supports leave free and in which the shape moves.
-void add_free_supports(const Structure& structure, const Shape& shape, Real largest,
-                       std::vector<std::string>& freedoms) {
+void add_free_supports(const Structure& structure, const Shape& shape, Real largest, std::vector<Freedom>& freedoms) {
     for (const Support& support : structure.model->supports) {
         const Real values[] = {shape[3 * support.node], shape[3 * support.node + 1],
                                shape[3 * support.node + 2] * structure.size};
@@ -134,18 +139,28 @@ void add_free_supports(const Structure& structure, const Shape& shape, Real larg
         for (int c = 0; c < 3; ++c)
             if (restraints[c]->is_free() && std::abs(values[c]) > still * largest)
                 freedoms.push_back(
-                    fmt::format("the support at {} leaves {} free", node_name(structure, support.node), names[c]));
+                    {fmt::format("the support at {} leaves {}{} free", node_name(structure, support.node),
+                                 c < 2 && structure.turned_axes(support.node) ? "its own " : "", names[c]),
+                     support.position});
     }
 }
 
-std::string advice(const std::vector<std::string>& freedoms) {
+std::string advice(const std::vector<Freedom>& freedoms) {
     if (freedoms.empty()) return "No support or member resists this: add one that does.";
-    return fmt::format("What lets it: {}. Hold one of these, or add a support or a member.", join(freedoms));
+    std::vector<std::string> texts;
+    for (const Freedom& freedom : freedoms) texts.push_back(freedom.text);
+    return fmt::format("What lets it: {}. Hold one of these, or add a support or a member.", join(texts));
+}
+
+Position first_moving_node(const Structure& structure, const Shape& shape, Real largest) {
+    for (int node = 0; node < static_cast<int>(structure.model->nodes.size()); ++node)
+        if (moves(structure, shape, node, largest)) return structure.model->nodes[node].position;
+    return {};
 }
 
 } // namespace
 
-std::string describe_mechanism(const Structure& structure, const Shape& shape) {
+Diagnostic describe_mechanism(const Structure& structure, const Shape& shape) {
     Real largest = 0;
     for (int node = 0; node < structure.node_count; ++node) {
         const Movement m = movement_of(structure, shape, node);
@@ -154,7 +169,7 @@ std::string describe_mechanism(const Structure& structure, const Shape& shape) {
     std::vector<std::string> parts;
     for (const Moving& group : moving_nodes(structure, shape, largest)) parts.push_back(told(group));
     const std::vector<std::string> members = moving_members(structure, shape, largest);
-    std::vector<std::string> freedoms;
+    std::vector<Freedom> freedoms;
     add_free_supports(structure, shape, largest, freedoms);
     for (const Segment& segment : structure.segments)
         if (freedoms.size() <= most_names &&
@@ -167,19 +182,25 @@ std::string describe_mechanism(const Structure& structure, const Shape& shape) {
     }
     if (members.size() == 1) text += fmt::format("; the member {} goes with it", members[0]);
     if (members.size() > 1) text += fmt::format("; the members {} go with it", join(members));
-    return text + ". " + advice(freedoms);
+    text += ". ";
+    text += advice(freedoms);
+    return {Diagnostic::Severity::error,
+            freedoms.empty() ? first_moving_node(structure, shape, largest) : freedoms[0].position, text};
 }
 
-std::string describe_self_mechanisms(const Structure& structure) {
-    std::vector<std::string> found;
+Diagnostics describe_self_mechanisms(const Structure& structure) {
+    Diagnostics found;
     for (const Segment& segment : structure.segments) {
         const std::string why = elements::self_mechanism(segment.frame);
-        if (!why.empty())
-            found.push_back(fmt::format("the member {}: {}", structure.model->members[segment.member].name, why));
+        if (why.empty()) continue;
+        const Member& member = structure.model->members[segment.member];
+        found.push_back(
+            {Diagnostic::Severity::error, member.position,
+             fmt::format(
+                 "the member {} is a mechanism by itself: {}. Hold one of these releases, or give it a stiffness.",
+                 member.name, why)});
     }
-    if (found.empty()) return {};
-    return fmt::format("released into a mechanism by itself is {}. Hold one of these releases, or give it a stiffness.",
-                       join(found));
+    return found;
 }
 
 } // namespace groundsill

@@ -1,8 +1,6 @@
 #pragma once
 // Whether a structure can stand, and if not, who moves and what lets it.
 
-#include <string>
-
 #include "system/refine.hpp"
 
 namespace groundsill {
@@ -18,10 +16,11 @@ struct MechanismSearch {
 /// have 1e-12, a mechanism has the square of round-off, about 1e-38.
 MechanismSearch find_mechanisms(const Structure& structure, const BlockMatrix& matrix, const Factor& factor);
 
-/// Tells a mechanism: which node moves how, which members go with it, and what lets it.
-std::string describe_mechanism(const Structure& structure, const Shape& shape);
+/// Tells a mechanism: which node moves how, which members go with it, and what lets it; with the place of the first
+/// thing that lets it, or of the first node that moves.
+Diagnostic describe_mechanism(const Structure& structure, const Shape& shape);
 
-/// The first member that its own releases set free, told as a message; empty where there is none.
-std::string describe_self_mechanisms(const Structure& structure);
+/// The members that their own releases set free.
+Diagnostics describe_self_mechanisms(const Structure& structure);
 
 } // namespace groundsill

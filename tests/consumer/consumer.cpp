@@ -39,7 +39,7 @@ int main() {
     }
     const groundsill::Outcome outcome = groundsill::analyse(*reading.model);
     if (!outcome.analysis) {
-        std::fputs(outcome.refusal.message.c_str(), stderr);
+        std::fputs(outcome.refusals.front().message.c_str(), stderr);
         return 3;
     }
     const auto moment = groundsill::case_diagram(*outcome.analysis, 0, 0).extremes(groundsill::Curve::M, 1e-6).max;

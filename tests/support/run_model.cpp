@@ -102,7 +102,7 @@ Result run(std::string_view toml, int places) {
     const groundsill::Model model = read(toml);
     const groundsill::Outcome outcome = groundsill::analyse(model);
     if (!outcome.analysis) {
-        give_up(fmt::format("the structure is refused: {}\n{}", outcome.refusal.message, toml));
+        give_up(fmt::format("the structure is refused: {}\n{}", outcome.refusals.front().message, toml));
     }
     std::string json;
     groundsill::write_json(*outcome.analysis, groundsill::WriteOptions{places},
@@ -114,7 +114,12 @@ std::string diagnostics(std::string_view toml) { return lines(groundsill::read_m
 
 std::string refusal(std::string_view toml) {
     const groundsill::Model model = read(toml);
-    return groundsill::analyse(model).refusal.message;
+    std::string text;
+    for (const groundsill::Diagnostic& refusal : groundsill::analyse(model).refusals) {
+        if (!text.empty()) text += '\n';
+        text += refusal.message;
+    }
+    return text;
 }
 
 } // namespace test

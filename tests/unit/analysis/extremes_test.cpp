@@ -28,7 +28,7 @@ Diagram humps(double first, double second) {
 
 Analysis analysed(const Model& model) {
     const Outcome outcome = analyse(model);
-    REQUIRE_MESSAGE(outcome.analysis, outcome.refusal.message);
+    REQUIRE_MESSAGE(outcome.analysis, outcome.refusals.front().message);
     return *outcome.analysis;
 }
 

@@ -59,13 +59,13 @@ TEST_CASE("a hinge inside a run is named by its place") {
 }
 
 TEST_CASE("a member that its own releases set free is named") {
-    CHECK(test::refusal(model(two_spans,
-                              member("AB", "A", "B", "{ start = { axial = 'free' }, end = { axial = 'free' } }") +
-                                  member("BC", "B", "C"),
-                              "A = 'fixed'\nB = 'fixed'\nC = 'fixed'\n")) ==
-          "released into a mechanism by itself is the member AB: axial is free at both ends. Hold one of these "
-          "releases, or give it "
-          "a stiffness.");
+    CHECK(
+        test::refusal(model(two_spans,
+                            member("AB", "A", "B", "{ start = { axial = 'free' }, end = { axial = 'free' } }") +
+                                member("BC", "B", "C"),
+                            "A = 'fixed'\nB = 'fixed'\nC = 'fixed'\n")) ==
+        "the member AB is a mechanism by itself: axial is free at both ends. Hold one of these releases, or give it a "
+        "stiffness.");
 }
 
 TEST_CASE("a moment on a node without rotation is a mechanism") {

@@ -15,7 +15,7 @@ namespace {
 
 std::string summary_of(const Model& model, bool colour = false) {
     const Outcome outcome = analyse(model);
-    REQUIRE_MESSAGE(outcome.analysis, outcome.refusal.message);
+    REQUIRE_MESSAGE(outcome.analysis, outcome.refusals.front().message);
     return summary_text(*outcome.analysis, colour);
 }
 
@@ -277,7 +277,7 @@ TEST_SUITE("starter models") {
             CHECK(read.diagnostics.empty());
             REQUIRE(read.model);
             const Outcome outcome = analyse(*read.model);
-            REQUIRE_MESSAGE(outcome.analysis, outcome.refusal.message);
+            REQUIRE_MESSAGE(outcome.analysis, outcome.refusals.front().message);
             CHECK(outcome.analysis->warnings.empty());
             CHECK(outcome.analysis->verification.equilibrium < 1e-12);
             CHECK(outcome.analysis->strength);
