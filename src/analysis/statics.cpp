@@ -301,11 +301,11 @@ Outcome analyse(const Model& model) {
     if (model.mass) {
         try {
             analysis.vibration = find_modes(*internals, *model.mass, false);
+            std::ranges::copy(analysis.vibration->warnings, std::back_inserter(analysis.warnings));
         } catch (const std::runtime_error& error) {
-            outcome.refusals.push_back({Diagnostic::Severity::error, model.mass->position, error.what()});
-            return outcome;
+            // the statics stand without them
+            analysis.warnings.push_back(fmt::format("no natural frequencies: {}", error.what()));
         }
-        std::ranges::copy(analysis.vibration->warnings, std::back_inserter(analysis.warnings));
     }
     outcome.analysis = std::move(analysis);
     return outcome;

@@ -46,6 +46,7 @@ void read_geometry(Draft& draft, const Fields& top);     ///< [nodes], [members]
 void read_supports(Draft& draft, const Fields& top);     ///< [supports]
 void read_cases(Draft& draft, const Fields& top);        ///< [cases]
 void read_combinations(Draft& draft, const Fields& top); ///< [combinations]
+void read_mass(Draft& draft, const Fields& top);         ///< [mass]
 
 /// Reads `loads` of one case.
 void read_loads(Draft& draft, LoadCase& load_case, const Field& loads, const Path& case_path);

@@ -25,7 +25,7 @@ constexpr Key rows[] = {
     {"model", "cases", table, {}, "", "cases", "load cases"},
     {"model", "combinations", table, {}, "", "combinations", "sums of cases with factors"},
     {"model", "checks", table, {}, "", "checks", "limits to be kept", later},
-    {"model", "mass", table, {}, "", "mass", "asks for natural frequencies", later},
+    {"model", "mass", table, {}, "", "mass", "asks for natural frequencies"},
     {"model", "floor", table, {}, "", "floor", "asks for walking-vibration screening", later},
     {"model", "stability", table, {}, "", "stability", "asks for critical load factors", later},
 
@@ -213,12 +213,12 @@ constexpr Key rows[] = {
     {"axial_limits", "tension|compression", quantity, dim::force, "", "", "limit of one sign", later},
 
     // Vibration
-    {"mass", "cases", table, {}, "", "mass_cases", "cases whose downward loads are mass", later},
-    {"mass", "nodes", table, {}, "", "mass_nodes", "masses at nodes", later},
-    {"mass", "modes", integer | positive, {}, "", "", "how many modes; default 6", later},
+    {"mass", "cases", table, {}, "", "mass_cases", "cases whose downward loads are mass"},
+    {"mass", "nodes", table, {}, "", "mass_nodes", "masses at nodes"},
+    {"mass", "modes", integer | positive, {}, "", "", "how many modes, up to 1000; default 6"},
     {"mass", "state", name, {}, "combination", "", "combination whose contact state is kept", later},
-    {"mass_cases", "*", number, {}, "case", "", "factor of that case", later},
-    {"mass_nodes", "*", quantity | with_unit, dim::mass, "node", "", "mass at that node", later},
+    {"mass_cases", "*", number | not_negative, {}, "case", "", "factor of that case"},
+    {"mass_nodes", "*", quantity | not_negative | with_unit, dim::mass, "node", "", "mass at that node"},
     {"floor", "members", names, {}, "member", "", "members of the floor", later},
     {"floor", "beam", name, {}, "beam", "", "beam of the floor", later},
     {"floor", "method", words, {}, "DG11|EN 1995|CCIP-016", "", "methods of screening", later},

@@ -65,6 +65,7 @@ void read_tables(Draft& draft, const Fields& top) {
     read_supports(draft, top);
     read_cases(draft, top);
     read_combinations(draft, top);
+    read_mass(draft, top);
 }
 
 /// Reads the model of a text that was found harmless. The parsed tree is gone when this returns.

@@ -209,7 +209,6 @@ EigenPairs lowest_modes(const Structure& structure, const BlockMatrix& K, const 
     const int wanted = count + 3;
     EigenPairs pairs =
         directions <= most_dense ? dense_modes(structure, K, M, wanted, sigma) : sparse_modes(K, M, wanted, sigma);
-    check_pairs(K, M, pairs);
     if (pairs.values.empty()) return pairs;
     const std::size_t kept = std::min<std::size_t>(count, pairs.values.size());
     pairs.exhausted = static_cast<int>(kept) < count;
@@ -225,6 +224,7 @@ EigenPairs lowest_modes(const Structure& structure, const BlockMatrix& K, const 
     pairs.missed = std::max(0, eigenvalues_below(K, M, shift) - static_cast<int>(gap + 1));
     pairs.values.resize(kept);
     pairs.vectors.resize(kept);
+    check_pairs(K, M, pairs);
     return pairs;
 }
 
