@@ -1,5 +1,5 @@
-// The one translation unit that compiles fmt itself (as fmt's own format.cc does): the rest of the program compiles against
-// its declarations alone, and nothing has to be loaded when it starts, as a shared library would.
+// The one translation unit that compiles fmt itself (as fmt's own format.cc does): the rest of the program compiles
+// against its declarations alone, and nothing has to be loaded when it starts, as a shared library would.
 
 #include <fmt/format-inl.h>
 

@@ -25,7 +25,7 @@ constexpr std::string_view beam_tables = "Formulas: American Institute of Steel 
                                          "Table 8.1. From memory, and confirmed by an "
                                          "independent Macaulay integration of E I v'' = M.";
 
-constexpr std::array<GroupText, 10> groups{{
+constexpr std::array<GroupText, 11> groups{{
     {Group::simple_spans, "Simply supported beams and cantilevers", beam_tables},
     {Group::held_spans, "Propped, fixed and overhanging beams", beam_tables},
     {Group::imposed, "Imposed movements, temperature and elastic ends",
@@ -52,6 +52,13 @@ constexpr std::array<GroupText, 10> groups{{
      "moving loads. "
      "From memory, and confirmed by an independent search over all positions."},
     {Group::frames, "Worked frames", "Solved by an independent matrix program, unless a row names a publication."},
+    {Group::frequencies, "Natural frequencies",
+     "Frequency equations: R. D. Blevins, *Formulas for Natural Frequency and Mode Shape*, 1979; S. Timoshenko, "
+     "*Vibration "
+     "Problems in Engineering*, 2nd ed. 1937. From memory, and confirmed by an independent solution with exact dynamic "
+     "stiffnesses; the roots l of the equations were solved to 12 digits, f = l^2/(2 pi L^2) sqrt(E I/m). Frames: "
+     "solved by "
+     "that independent program, unless a row names a publication."},
     {Group::conventions, "Axes, signs and connections",
      "Statics and the force method by hand; the formula stands beside each check in `tests/published`."},
 }};
@@ -106,7 +113,8 @@ std::string verification_page() {
                                    "that the relative difference is "
                                    "held to: \"below 1e-9\" where the formula is exact for the model, \"below 1e-7\" "
                                    "where the formula is for axially rigid "
-                                   "members and the model's are only very stiff, \"printed digits\" where a printed "
+                                   "members and the model's are only very stiff, \"below 1e-6\" for frequencies, whose "
+                                   "members are cut into parts, \"printed digits\" where a printed "
                                    "value is compared (half a unit in "
                                    "its last place, unless the row says otherwise). Downward loads are positive in the "
                                    "formulas; signs of the results are "

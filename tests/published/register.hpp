@@ -18,6 +18,7 @@ enum class Group {
     settlement,
     influence,
     frames,
+    frequencies,
     conventions,
 };
 

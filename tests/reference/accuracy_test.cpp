@@ -234,7 +234,8 @@ TEST_SUITE("quick") {
     }
 
     TEST_CASE("semi-rigid releases from very soft to very stiff") {
-        // against E I/L³ of the portal's members; their E A/L is about 1e3 times that, so that 1e-7 makes a contrast of 1e10
+        // against E I/L³ of the portal's members; their E A/L is about 1e3 times that, so that 1e-7 makes a contrast of
+        // 1e10
         for (const double contrast : {1e-7, 1e-6, 1e-3, 1.0, 1e3, 1e6, 1e10}) {
             CAPTURE(contrast);
             Frame frame = portal();

@@ -7,7 +7,8 @@
 
 namespace test {
 
-/// The JSON of a run. A pointer is a JSON pointer (RFC 6901): "/cases/dead/reactions/A/y", "/cases/dead/members/AB/places/3/M".
+/// The JSON of a run. A pointer is a JSON pointer (RFC 6901): "/cases/dead/reactions/A/y",
+/// "/cases/dead/members/AB/places/3/M".
 class Result {
   public:
     explicit Result(const std::string& json);
