@@ -18,38 +18,28 @@ namespace {
 /// 1e-6.
 constexpr double wave = 0.2;
 
-/// Error in frequency that is allowed to the shapes along the axis and to shear, whose slopes are constant in a part:
-/// each errs by (kh)²/24 of its share of the mode's strain energy, k the wave number.
-constexpr double straight_error = 1e-5;
-
 /// Most parts of one segment; a wave that short is of no structural interest.
 constexpr int most_parts = 200;
 
-/// Mass per length where it is densest, or a little more where line loads do not overlap.
-Real densest(const SegmentLoadMass& mass) {
-    Real density = 0;
-    for (const elements::MassLine& line : mass.spread.lines) density += std::max(line.ma, line.mb);
-    return density;
-}
-
-/// Wave numbers of bending, (m ω² /EI)^¼, and along the axis, (m ω²/EA)^½; 1/m.
-struct WaveNumbers {
-    Real bending = 0;
-    Real axial = 0;
-};
-
-WaveNumbers wave_numbers(const Segment& segment, Real density, Real omega) {
-    return {std::pow(density * omega * omega * segment.frame.bending_flexibility, Real(0.25)),
-            std::sqrt(density * segment.frame.axial_flexibility) * omega};
-}
-
-int parts_of(const Segment& segment, const SegmentLoadMass& mass, const Fineness& fineness, int index) {
-    const Real density = densest(mass);
+/// \param fewest parts of a segment that has mass
+int parts_of(const Segment& segment, const SegmentLoadMass& mass, double omega, int fewest) {
+    Real total = 0;
+    for (const elements::MassLine& line : mass.spread.lines) total += (line.ma + line.mb) / 2 * (line.b - line.a);
+    const Real density = total / segment.frame.length;
     if (!(density > 0)) return 1;
-    const WaveNumbers waves = wave_numbers(segment, density, fineness.circular_frequency);
-    Real finest = std::max(waves.bending, waves.axial) / Real(wave);
-    if (!fineness.per_segment.empty()) finest = std::max(finest, Real(fineness.per_segment[index]));
-    return static_cast<int>(std::clamp(std::ceil(finest * segment.frame.length), Real(1), Real(most_parts)));
+    const Real bending = std::pow(density * Real(omega) * omega * segment.frame.bending_flexibility, Real(0.25));
+    const Real axial = std::sqrt(density * segment.frame.axial_flexibility) * Real(omega);
+    const Real wanted = std::ceil(std::max(bending, axial) * segment.frame.length / Real(wave));
+    return static_cast<int>(std::clamp(wanted, Real(fewest), Real(most_parts)));
+}
+
+/// Fewest parts of a segment with mass, so that all of them together can move in as many ways as there are modes asked
+/// for.
+int fewest_parts(const std::vector<SegmentLoadMass>& masses, int modes) {
+    const auto loaded =
+        std::ranges::count_if(masses, [](const SegmentLoadMass& mass) { return !mass.spread.lines.empty(); });
+    if (loaded == 0 || loaded > modes + 3) return 1;
+    return 1 + (modes + 3 + static_cast<int>(loaded) - 1) / static_cast<int>(loaded);
 }
 
 /// Places at which a segment is cut: evenly, and at its point masses.
@@ -211,16 +201,69 @@ std::vector<Mode::Share> flexibility_shares(const Structure& fine, const Movemen
     return shares;
 }
 
-Movements movements_of(const std::vector<double>& vector) {
-    Movements u(static_cast<int>(vector.size()));
-    std::copy(vector.begin(), vector.end(), u.high.begin());
-    return u;
+/// Work of the inertia of one part's shape on the further movement that it causes while the part's nodes stay: xᵀ M₂ x,
+/// the next term of the exact dynamic stiffness K - λ M - λ² M₂ - ... of the part.
+Real further_work(const Segment& part, const elements::SegmentMass& mass, const elements::State& node_i,
+                  const elements::State& node_j) {
+    if (mass.lines.empty()) return 0;
+    Diagram shape;
+    elements::Loading none;
+    elements::cut({}, part.frame.length, none);
+    elements::append_diagram(part.frame, none, elements::start_of_shape(part.frame, part.stiffness, node_i, node_j), 0,
+                             shape.pieces);
+    shape.length = static_cast<double>(part.frame.length);
+    elements::SegmentLoads inertia;
+    for (const elements::MassLine& line : mass.lines) {
+        const DiagramPlace a = shape.value(static_cast<double>(line.a)), b = shape.value(static_cast<double>(line.b));
+        inertia.lines.push_back(
+            {line.a, line.b, line.ma * a.along, line.ma * a.across, line.mb * b.along, line.mb * b.across});
+    }
+    elements::Loading loading;
+    elements::cut(inertia, part.frame.length, loading);
+    const elements::FixedEnd held = elements::fixed_end(part.frame, loading);
+    elements::State start;
+    start.N = held.q.N;
+    start.M = held.q.M1;
+    start.V = held.V_start;
+    elements::place_start(part.frame, loading, {}, {}, start);
+    Diagram further;
+    elements::append_diagram(part.frame, loading, start, 0, further.pieces);
+    further.length = shape.length;
+    constexpr std::array<double, 3> nodes{-0.7745966692414834, 0, 0.7745966692414834},
+        weights{5. / 18, 8. / 18, 5. / 18};
+    Real work = 0;
+    for (const elements::LineLoad& line : inertia.lines)
+        for (int g = 0; g < 3; ++g) {
+            const Real t = (1 + nodes[g]) / 2, span = line.b - line.a;
+            const DiagramPlace at = further.value(static_cast<double>(line.a + t * span));
+            work += weights[g] * span *
+                    ((line.pa + (line.pb - line.pa) * t) * at.along + (line.qa + (line.qb - line.qa) * t) * at.across);
+        }
+    if (mass.rotary > 0 && part.frame.shear_flexibility > 0) {
+        // couples c = ρI θ along the held part turn it: c² L³/(12 EI) Φ/(1 + Φ)
+        const Real L = part.frame.length;
+        const Real phi = 12 * part.frame.shear_flexibility / (part.frame.bending_flexibility * L * L);
+        const Real c = mass.rotary * (node_i.rotation + node_j.rotation) / 2;
+        work += c * c * L * L * L * part.frame.bending_flexibility / 12 * phi / (1 + phi);
+    }
+    return work;
+}
+
+Real further_work(const VibratingStructure& vibrating, const Movements& u) {
+    const Structure& fine = vibrating.fine.structure;
+    Real work = 0;
+    for (std::size_t k = 0; k < fine.segments.size(); ++k)
+        work += further_work(fine.segments[k], vibrating.masses[k], end_state(fine, fine.segments[k], false, u),
+                             end_state(fine, fine.segments[k], true, u));
+    return work;
 }
 
 Mode make_mode(const VibratingStructure& vibrating, double lambda, const std::vector<double>& vector, bool rigid) {
     const Structure& fine = vibrating.fine.structure;
     const Model& model = *fine.model;
-    const Movements u = movements_of(vector);
+    Movements u(fine.directions());
+    std::copy(vector.begin(), vector.end(), u.high.begin());
+    lambda *= 1 - lambda * static_cast<double>(further_work(vibrating, u));
     Mode mode;
     mode.frequency = rigid ? 0 : std::sqrt(std::max(lambda, 0.0)) / (2 * std::numbers::pi);
     for (int node = 0; node < static_cast<int>(model.nodes.size()); ++node) {
@@ -255,13 +298,14 @@ Mode make_mode(const VibratingStructure& vibrating, double lambda, const std::ve
 
 } // namespace
 
-VibratingStructure cut_for(const Internals& internals, const MassModel& mass, const Fineness& fineness) {
+VibratingStructure cut_for(const Internals& internals, const MassModel& mass, double omega) {
     const Structure& structure = internals.structure;
     std::vector<SegmentLoadMass> masses;
     for (const Segment& segment : structure.segments) masses.push_back(mass_of_segment(internals, mass, segment));
+    const int fewest = fewest_parts(masses, mass.modes);
     VibratingStructure result;
     result.fine = subdivide(structure, [&](int k) {
-        return cut_places(structure.segments[k], masses[k], parts_of(structure.segments[k], masses[k], fineness, k));
+        return cut_places(structure.segments[k], masses[k], parts_of(structure.segments[k], masses[k], omega, fewest));
     });
     const Structure& fine = result.fine.structure;
     result.stiffness = assemble(fine);
@@ -271,9 +315,10 @@ VibratingStructure cut_for(const Internals& internals, const MassModel& mass, co
     for (int k = 0; k < static_cast<int>(structure.segments.size()); ++k) {
         for (int part = result.fine.first_part[k]; part < result.fine.first_part[k + 1]; ++part) {
             const Segment& segment = fine.segments[part];
-            const elements::EndMatrix M = elements::consistent_mass(
-                segment.frame, segment.stiffness,
+            result.masses.push_back(
                 part_of(masses[k].spread, segment.offset - structure.segments[k].offset, segment.frame.length));
+            const elements::EndMatrix M =
+                elements::consistent_mass(segment.frame, segment.stiffness, result.masses.back());
             add_end_matrix(fine, segment, M, result.mass);
             add_pull(fine, segment, M, result);
         }
@@ -286,64 +331,19 @@ VibratingStructure cut_for(const Internals& internals, const MassModel& mass, co
     return result;
 }
 
-namespace {
-
-/// Strain energies of one mode in a segment, along the axis and from shear.
-struct StraightEnergies {
-    Real axial = 0;
-    Real shear = 0;
-};
-
-StraightEnergies straight_energies(const VibratingStructure& vibrating, int segment, const Movements& u) {
-    const Structure& fine = vibrating.fine.structure;
-    StraightEnergies energies;
-    for (int part = vibrating.fine.first_part[segment]; part < vibrating.fine.first_part[segment + 1]; ++part) {
-        const elements::BasicForces q = basic_forces(fine, fine.segments[part], u);
-        const elements::Frame& frame = fine.segments[part].frame;
-        energies.axial += q.N * q.N * frame.length * frame.axial_flexibility;
-        energies.shear += q.V * q.V * frame.length * frame.shear_flexibility;
-    }
-    return energies;
-}
-
-/// The cut that the modes found so far ask for.
-Fineness fineness_for(const Internals& internals, const MassModel& mass, const VibratingStructure& vibrating,
-                      const EigenPairs& pairs) {
-    const Structure& structure = internals.structure;
-    Fineness fineness;
-    fineness.circular_frequency = std::sqrt(std::max(pairs.values.back(), 0.0));
-    fineness.per_segment.assign(structure.segments.size(), 0);
-    std::vector<Real> densities;
-    for (const Segment& segment : structure.segments)
-        densities.push_back(densest(mass_of_segment(internals, mass, segment)));
-    for (std::size_t mode = 0; mode < pairs.values.size(); ++mode) {
-        if (!(pairs.values[mode] > 0)) continue;
-        const Movements u = movements_of(pairs.vectors[mode]);
-        // φᵀ K φ = λ, as φᵀ M φ = 1
-        const Real scale = 24 * Real(straight_error) * pairs.values[mode];
-        for (int k = 0; k < static_cast<int>(structure.segments.size()); ++k) {
-            const StraightEnergies energies = straight_energies(vibrating, k, u);
-            const WaveNumbers waves =
-                wave_numbers(structure.segments[k], densities[k], std::sqrt(Real(pairs.values[mode])));
-            const Real finest = std::max(waves.axial * std::sqrt(energies.axial / scale),
-                                         waves.bending * std::sqrt(energies.shear / scale));
-            fineness.per_segment[k] = std::max(fineness.per_segment[k], static_cast<double>(finest));
-        }
-    }
-    return fineness;
-}
-
-} // namespace
-
 Vibration find_modes(const Internals& internals, const MassModel& mass, bool is_free) {
-    VibratingStructure vibrating = cut_for(internals, mass, {});
+    VibratingStructure vibrating = cut_for(internals, mass, 0);
     EigenPairs pairs;
+    double fits = 0;
     for (int round = 0; round < 6; ++round) {
         pairs = lowest_modes(vibrating.fine.structure, vibrating.stiffness, vibrating.mass, mass.modes, is_free);
         if (pairs.values.empty()) break;
-        VibratingStructure finer = cut_for(internals, mass, fineness_for(internals, mass, vibrating, pairs));
-        // the frequencies can only fall as parts get shorter: a cut that is no finer will do
-        if (finer.fine.structure.node_count <= vibrating.fine.structure.node_count) break;
+        const double omega = std::sqrt(std::max(pairs.values.back(), 0.0));
+        // the parts must fit the highest mode; its own estimate can only fall as they get shorter
+        if (omega <= fits) break;
+        fits = omega;
+        VibratingStructure finer = cut_for(internals, mass, fits);
+        if (finer.fine.structure.node_count == vibrating.fine.structure.node_count) break;
         vibrating = std::move(finer);
     }
     Vibration result;

@@ -58,6 +58,7 @@ Eigen::MatrixXd dense(const BlockMatrix& matrix, const std::vector<int>& directi
 EigenPairs dense_modes(const Structure& structure, const BlockMatrix& K, const BlockMatrix& M, int count,
                        double sigma) {
     const std::vector<int> directions = active_directions(structure);
+    if (directions.empty()) return {};
     const Eigen::MatrixXd mass = dense(M, directions, structure.directions());
     const Eigen::MatrixXd stiffness = dense(K, directions, structure.directions()) - sigma * mass;
     // scaled to a diagonal of 1, so that units do not spoil the Cholesky factor
@@ -209,7 +210,10 @@ EigenPairs lowest_modes(const Structure& structure, const BlockMatrix& K, const 
     const int wanted = count + 3;
     EigenPairs pairs =
         directions <= most_dense ? dense_modes(structure, K, M, wanted, sigma) : sparse_modes(K, M, wanted, sigma);
-    if (pairs.values.empty()) return pairs;
+    if (pairs.values.empty()) {
+        pairs.exhausted = true;
+        return pairs;
+    }
     const std::size_t kept = std::min<std::size_t>(count, pairs.values.size());
     pairs.exhausted = static_cast<int>(kept) < count;
     // counted at a shift in the widest gap from the last wanted mode on
