@@ -42,18 +42,43 @@ int fewest_parts(const std::vector<SegmentLoadMass>& masses, int modes) {
     return 1 + (modes + 3 + static_cast<int>(loaded) - 1) / static_cast<int>(loaded);
 }
 
-/// Places at which a segment is cut: evenly, and at its point masses.
+/// Nearest that cuts and point masses may come to each other and to the ends, in lengths of an even part: shorter parts
+/// would be so stiff that the others are lost beside them.
+constexpr Real nearest = 1e-3L;
+
+/// Places at which a segment is cut: at its point masses, and evenly where none of them is near.
 std::vector<Real> cut_places(const Segment& segment, const SegmentLoadMass& mass, int parts) {
-    const Real L = segment.frame.length;
+    const Real L = segment.frame.length, part = L / parts;
     std::vector<Real> places;
-    for (int k = 1; k < parts; ++k) places.push_back(L * k / parts);
     for (const PointMass& point : mass.points) places.push_back(point.a);
     std::sort(places.begin(), places.end());
-    const Real near = Real(1e-9) * L;
     std::vector<Real> kept;
     for (const Real place : places)
-        if (place > near && place < L - near && (kept.empty() || place > kept.back() + near)) kept.push_back(place);
+        if (place > nearest * part / 4 && place < L - nearest * part / 4 &&
+            (kept.empty() || place > kept.back() + nearest * part))
+            kept.push_back(place);
+    const std::size_t points = kept.size();
+    for (int k = 1; k < parts; ++k) {
+        const Real place = part * k;
+        const auto is_near = [&](Real other) { return std::abs(other - place) < part / 4; };
+        if (std::none_of(kept.begin(), kept.begin() + static_cast<std::ptrdiff_t>(points), is_near))
+            kept.push_back(place);
+    }
+    std::sort(kept.begin(), kept.end());
     return kept;
+}
+
+/// True where a release lets the member's end travel apart from the node; one in moment does not.
+bool lets_travel(const Release& release) { return !release.axial.is_fixed() || !release.shear.is_fixed(); }
+
+/// A mass at a released end stands on the member's side of the release: a little inside, where it gets a node of its
+/// own.
+void keep_inside(const Segment& segment, SegmentLoadMass& mass) {
+    const Real L = segment.frame.length, margin = nearest * L / 2;
+    for (PointMass& point : mass.points) {
+        if (lets_travel(segment.frame.start)) point.a = std::max(point.a, margin);
+        if (lets_travel(segment.frame.end)) point.a = std::min(point.a, L - margin);
+    }
 }
 
 /// The mass of a part of a segment, from that of the whole.
@@ -302,6 +327,7 @@ VibratingStructure cut_for(const Internals& internals, const MassModel& mass, do
     const Structure& structure = internals.structure;
     std::vector<SegmentLoadMass> masses;
     for (const Segment& segment : structure.segments) masses.push_back(mass_of_segment(internals, mass, segment));
+    for (std::size_t k = 0; k < masses.size(); ++k) keep_inside(structure.segments[k], masses[k]);
     const int fewest = fewest_parts(masses, mass.modes);
     VibratingStructure result;
     result.fine = subdivide(structure, [&](int k) {
@@ -352,6 +378,8 @@ Vibration find_modes(const Internals& internals, const MassModel& mass, bool is_
     for (std::size_t k = 0; k < pairs.values.size(); ++k)
         result.modes.push_back(
             make_mode(vibrating, pairs.values[k], pairs.vectors[k], is_free && pairs.values[k] < 1e-7 * largest));
+    // the correction can change the order of modes that lie close together
+    std::ranges::stable_sort(result.modes, {}, &Mode::frequency);
     if (pairs.exhausted)
         result.warnings.push_back(
             fmt::format("[mass] asks for {} modes, but the mass allows only {} with a finite frequency", mass.modes,
